@@ -1,0 +1,192 @@
+// Package fit turns the exact curves of a solved tooth into drawable paths:
+// tangent-continuous arcs or chords that stay within a tolerance, with the
+// deviation measured on the result. Lengths are millimetres, angles radians.
+package fit
+
+import (
+	"math"
+
+	"gonum.org/v1/gonum/spatial/r2"
+)
+
+// Kind says what a drawn segment is.
+type Kind uint8
+
+// The kinds of segment that a drawing can hold.
+const (
+	Line Kind = iota
+	Arc
+	Cubic
+)
+
+// Segment is one drawn piece from Start to End.
+//
+// An Arc is held as its bulge, the tangent of a quarter of the included angle,
+// positive when it turns counter-clockwise; the included angle stays below pi,
+// so |Bulge| < 1. A Cubic is a Bezier curve with the handles C1 and C2.
+type Segment struct {
+	Kind       Kind
+	Start, End r2.Vec
+	Bulge      float64
+	C1, C2     r2.Vec
+}
+
+// LineTo returns the straight segment from a to b.
+func LineTo(a, b r2.Vec) Segment { return Segment{Kind: Line, Start: a, End: b} }
+
+// ArcTo returns the circular segment from a to b with the given bulge.
+func ArcTo(a, b r2.Vec, bulge float64) Segment {
+	return Segment{Kind: Arc, Start: a, End: b, Bulge: bulge}
+}
+
+// Chord is the distance from Start to End.
+func (s Segment) Chord() float64 { return r2.Norm(r2.Sub(s.End, s.Start)) }
+
+// Radius is the radius of an Arc, with c the chord and b the bulge:
+//
+//	R = c (1 + b^2) / (4 |b|)
+//
+// It is +Inf for a straight segment.
+func (s Segment) Radius() float64 {
+	if s.Kind != Arc || s.Bulge == 0 {
+		return math.Inf(1)
+	}
+	return s.Chord() * (1 + s.Bulge*s.Bulge) / (4 * math.Abs(s.Bulge))
+}
+
+// Included is the signed angle an Arc turns through, 4 atan(bulge); 0 for the
+// other kinds.
+func (s Segment) Included() float64 {
+	if s.Kind != Arc {
+		return 0
+	}
+	return 4 * math.Atan(s.Bulge)
+}
+
+// Center is the center of an Arc: the middle of the chord plus its left normal
+// times (1 - b^2)/(4 b). It is meaningless for a straight segment.
+func (s Segment) Center() r2.Vec {
+	h := (1 - s.Bulge*s.Bulge) / (4 * s.Bulge)
+	d := r2.Sub(s.End, s.Start)
+	mid := r2.Scale(0.5, r2.Add(s.Start, s.End))
+	return r2.Add(mid, r2.Vec{X: -h * d.Y, Y: h * d.X})
+}
+
+// Length is the arc length: exact for lines and arcs, by Gauss-Legendre
+// quadrature on each of eight parts for cubics.
+func (s Segment) Length() float64 {
+	switch s.Kind {
+	case Arc:
+		if s.Bulge == 0 {
+			return s.Chord()
+		}
+		return s.Radius() * math.Abs(s.Included())
+	case Cubic:
+		return s.cubicLength()
+	}
+	return s.Chord()
+}
+
+// SweptArea is the signed area between the segment and the origin, the
+// segment's share of 1/2 the integral of x dy - y dx. Summed over a closed
+// path it is the enclosed area, positive for a counter-clockwise loop.
+func (s Segment) SweptArea() float64 {
+	cross := r2.Cross(s.Start, s.End) / 2
+	switch s.Kind {
+	case Arc:
+		return cross + s.arcCap()
+	case Cubic:
+		return s.cubicArea()
+	}
+	return cross
+}
+
+// arcCap is the area between an arc and its chord, R^2 (phi - sin phi)/2, with
+// the sign of the turn. For small angles the difference is taken from its
+// series, which keeps full precision where subtraction would not.
+func (s Segment) arcCap() float64 {
+	if s.Bulge == 0 {
+		return 0
+	}
+	phi := s.Included()
+	r := s.Radius()
+	const series = 0.1 // rad; the next term is below 1e-16 of the first there
+	diff := phi - math.Sin(phi)
+	if math.Abs(phi) < series {
+		q := phi * phi
+		diff = phi * q / 6 * (1 - q/20*(1-q/42*(1-q/72*(1-q/110))))
+	}
+	return r * r * diff / 2
+}
+
+// Bounds returns the least box around the segment.
+func (s Segment) Bounds() r2.Box {
+	b := r2.Box{
+		Min: r2.Vec{X: math.Min(s.Start.X, s.End.X), Y: math.Min(s.Start.Y, s.End.Y)},
+		Max: r2.Vec{X: math.Max(s.Start.X, s.End.X), Y: math.Max(s.Start.Y, s.End.Y)},
+	}
+	switch s.Kind {
+	case Arc:
+		if s.Bulge != 0 {
+			s.arcBounds(&b)
+		}
+	case Cubic:
+		s.cubicBounds(&b)
+	}
+	return b
+}
+
+// arcBounds widens b by the quadrant points the arc passes through.
+func (s Segment) arcBounds(b *r2.Box) {
+	c, r := s.Center(), s.Radius()
+	quadrants := [4]r2.Vec{{X: c.X + r, Y: c.Y}, {X: c.X, Y: c.Y + r}, {X: c.X - r, Y: c.Y}, {X: c.X, Y: c.Y - r}}
+	chord := r2.Sub(s.End, s.Start)
+	for _, q := range quadrants {
+		// The arc lies right of its chord when it turns counter-clockwise.
+		side := r2.Cross(chord, r2.Sub(q, s.Start))
+		if side*s.Bulge >= 0 {
+			continue
+		}
+		b.Min = r2.Vec{X: math.Min(b.Min.X, q.X), Y: math.Min(b.Min.Y, q.Y)}
+		b.Max = r2.Vec{X: math.Max(b.Max.X, q.X), Y: math.Max(b.Max.Y, q.Y)}
+	}
+}
+
+// startHeading is the direction of travel at Start of a line or an arc, in rad.
+func (s Segment) startHeading() float64 {
+	return math.Atan2(s.End.Y-s.Start.Y, s.End.X-s.Start.X) - s.Included()/2
+}
+
+// Reversed is the same piece travelled from End to Start.
+func (s Segment) Reversed() Segment {
+	return Segment{Kind: s.Kind, Start: s.End, End: s.Start, Bulge: -s.Bulge, C1: s.C2, C2: s.C1}
+}
+
+// Mapped is the piece with every point moved by f, which must be an isometry;
+// mirrored says that it turns the orientation round.
+func (s Segment) Mapped(f func(r2.Vec) r2.Vec, mirrored bool) Segment {
+	m := Segment{Kind: s.Kind, Start: f(s.Start), End: f(s.End), Bulge: s.Bulge}
+	if mirrored {
+		m.Bulge = -m.Bulge
+	}
+	if s.Kind == Cubic {
+		m.C1, m.C2 = f(s.C1), f(s.C2)
+	}
+	return m
+}
+
+// StartTangent is the unit direction of travel at Start.
+func (s Segment) StartTangent() r2.Vec {
+	switch s.Kind {
+	case Arc:
+		return r2.Unit(r2.Rotate(r2.Sub(s.End, s.Start), -s.Included()/2, r2.Vec{}))
+	case Cubic:
+		return r2.Unit(r2.Sub(s.C1, s.Start))
+	}
+	return r2.Unit(r2.Sub(s.End, s.Start))
+}
+
+// EndTangent is the unit direction of travel at End.
+func (s Segment) EndTangent() r2.Vec {
+	return r2.Scale(-1, s.Reversed().StartTangent())
+}
