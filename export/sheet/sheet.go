@@ -1,0 +1,230 @@
+// Package sheet turns a drawing in millimetres into what a file shows of it:
+// scaled to the unit of the file, every coordinate rounded once, and checked
+// against the rules that readers rely on. Both writers start from here, so DXF
+// and SVG of one drawing agree to the last digit.
+package sheet
+
+import (
+	"fmt"
+	"math"
+
+	"gonum.org/v1/gonum/spatial/r2"
+
+	"flankwright/export"
+	"flankwright/export/fixed"
+	"flankwright/profile/fit"
+)
+
+// MinSegment is the shortest chord that may be written, mm. The strictest
+// importer known takes points closer than this for one point.
+const MinSegment = 1e-6
+
+// maxLayerName is the length limit of names in AC1009 files.
+const maxLayerName = 31
+
+// Sheet is a checked drawing. Its lengths are in Unit, unlike those of
+// export.Drawing, and rounded to fixed.Decimals.
+type Sheet struct {
+	Unit   export.Unit
+	Items  []export.Item // in the order of the drawing
+	Bounds r2.Box        // least box around all items, rounded
+}
+
+// New scales, rounds and checks d. The error is an *Error; the first violation
+// ends the search. The drawing is not changed and not kept.
+//
+// A layer name, a path or a circle that breaks a Rule is refused. What New does
+// not look for are loops that cross themselves or each other: that needs the
+// exact geometry and is the solver's promise.
+func New(d export.Drawing) (*Sheet, error) {
+	if len(d.Items) == 0 {
+		return nil, &Error{Rule: RuleEmpty, Item: -1, Segment: -1}
+	}
+	if d.Unit != export.Millimetre && d.Unit != export.Inch {
+		return nil, &Error{Rule: RuleUnit, Item: -1, Segment: -1, Detail: fmt.Sprint(uint8(d.Unit))}
+	}
+	segments, paths, circles := 0, 0, 0
+	for _, it := range d.Items {
+		if it.Path != nil {
+			paths++
+			segments += len(it.Path.Segments)
+		}
+		if it.Circle != nil {
+			circles++
+		}
+	}
+	b := builder{
+		scale:    d.Unit.Scale(),
+		segments: make([]fit.Segment, 0, segments),
+		paths:    make([]fit.Path, 0, paths),
+		circles:  make([]export.Circle, 0, circles),
+	}
+	s := &Sheet{Unit: d.Unit, Items: make([]export.Item, 0, len(d.Items))}
+	for i, it := range d.Items {
+		b.item, b.layer = i, it.Layer
+		out, err := b.convert(it)
+		if err != nil {
+			return nil, err
+		}
+		s.Items = append(s.Items, out)
+	}
+	s.Bounds = bounds(s.Items)
+	if !fixed.InRange(s.Bounds.Min.X) || !fixed.InRange(s.Bounds.Min.Y) ||
+		!fixed.InRange(s.Bounds.Max.X) || !fixed.InRange(s.Bounds.Max.Y) {
+		return nil, &Error{Rule: RuleFinite, Item: -1, Segment: -1, Detail: fmt.Sprint(s.Bounds)}
+	}
+	return s, nil
+}
+
+// builder converts item by item into arrays shared by the whole sheet.
+type builder struct {
+	scale    float64
+	segments []fit.Segment
+	paths    []fit.Path
+	circles  []export.Circle
+
+	item  int          // index of the item being converted, for errors
+	layer export.Layer // its layer
+}
+
+// fail makes the error for the current item.
+func (b *builder) fail(rule Rule, segment int, at r2.Vec, detail string) error {
+	return &Error{Rule: rule, Layer: b.layer, Item: b.item, Segment: segment, At: at, Detail: detail}
+}
+
+func (b *builder) convert(it export.Item) (export.Item, error) {
+	none := r2.Vec{}
+	if !ValidLayer(it.Layer) {
+		return it, b.fail(RuleLayer, -1, none, "")
+	}
+	if it.Role > export.Marker {
+		return it, b.fail(RuleRole, -1, none, fmt.Sprint(uint8(it.Role)))
+	}
+	if (it.Path == nil) == (it.Circle == nil) {
+		return it, b.fail(RuleShape, -1, none, "")
+	}
+	out := export.Item{Layer: it.Layer, Role: it.Role}
+	if c := it.Circle; c != nil {
+		center, ok := b.round(c.Center)
+		radius := fixed.Round(c.Radius * b.scale)
+		if !ok || !fixed.InRange(radius) {
+			return it, b.fail(RuleFinite, -1, none, fmt.Sprint(*c))
+		}
+		if radius < MinSegment*b.scale {
+			return it, b.fail(RuleRadius, -1, none, fmt.Sprint(c.Radius))
+		}
+		b.circles = append(b.circles, export.Circle{Center: center, Radius: radius})
+		out.Circle = &b.circles[len(b.circles)-1]
+		return out, nil
+	}
+	path, err := b.path(*it.Path)
+	if err != nil {
+		return it, err
+	}
+	b.paths = append(b.paths, path)
+	out.Path = &b.paths[len(b.paths)-1]
+	return out, nil
+}
+
+// path rounds the points of p and checks every segment.
+func (b *builder) path(p fit.Path) (fit.Path, error) {
+	n := len(p.Segments)
+	if n == 0 || p.Closed && n < 2 {
+		return p, b.fail(RuleSegments, -1, r2.Vec{}, fmt.Sprintf("%d", n))
+	}
+	first := len(b.segments)
+	least := MinSegment * b.scale
+	for i, s := range p.Segments {
+		out, err := b.segment(s, i, least)
+		if err != nil {
+			return p, err
+		}
+		if i > 0 && out.Start != b.segments[first+i-1].End {
+			return p, b.fail(RuleGap, i, s.Start, "")
+		}
+		b.segments = append(b.segments, out)
+	}
+	// The capacity is cut so that nothing appended to one path can reach the next.
+	segs := b.segments[first : first+n : first+n]
+	if p.Closed {
+		if segs[n-1].End != segs[0].Start {
+			return p, b.fail(RuleGap, n-1, p.Segments[n-1].End, "the path does not close")
+		}
+		if n == 2 && segs[0].Kind != fit.Cubic && segs[1].Kind != fit.Cubic && segs[0].Bulge == -segs[1].Bulge {
+			return p, b.fail(RuleFlat, 1, p.Segments[1].Start, "")
+		}
+	}
+	return fit.Path{Segments: segs, Closed: p.Closed}, nil
+}
+
+// segment rounds and checks one segment; i is its index in the path.
+func (b *builder) segment(s fit.Segment, i int, least float64) (fit.Segment, error) {
+	start, ok := b.round(s.Start)
+	end, ok2 := b.round(s.End)
+	if !ok || !ok2 {
+		return s, b.fail(RuleFinite, i, s.Start, fmt.Sprintf("%v to %v", s.Start, s.End))
+	}
+	out := fit.Segment{Kind: s.Kind, Start: start, End: end}
+	dx, dy := end.X-start.X, end.Y-start.Y
+	if dx*dx+dy*dy < least*least {
+		return s, b.fail(RuleShort, i, s.Start, fmt.Sprintf("%.3g", s.Chord()))
+	}
+	switch s.Kind {
+	case fit.Line:
+	case fit.Arc:
+		if !(math.Abs(s.Bulge) < 1) { // NaN too
+			return s, b.fail(RuleTurn, i, s.Start, fmt.Sprintf("bulge %g", s.Bulge))
+		}
+		out.Bulge = fixed.Round(s.Bulge)
+		if math.Abs(out.Bulge) >= 1 {
+			return s, b.fail(RuleTurn, i, s.Start, "180 degrees after rounding")
+		}
+	case fit.Cubic:
+		var ok3, ok4 bool
+		out.C1, ok3 = b.round(s.C1)
+		out.C2, ok4 = b.round(s.C2)
+		if !ok3 || !ok4 {
+			return s, b.fail(RuleFinite, i, s.Start, fmt.Sprintf("handles %v, %v", s.C1, s.C2))
+		}
+	default:
+		return s, b.fail(RuleKind, i, s.Start, fmt.Sprint(uint8(s.Kind)))
+	}
+	return out, nil
+}
+
+// round scales and rounds a point; ok is false if it cannot be a coordinate.
+func (b *builder) round(v r2.Vec) (r2.Vec, bool) {
+	p := r2.Vec{X: fixed.Round(v.X * b.scale), Y: fixed.Round(v.Y * b.scale)}
+	return p, fixed.InRange(p.X) && fixed.InRange(p.Y)
+}
+
+// ValidLayer reports whether the name may stand in a file.
+func ValidLayer(l export.Layer) bool {
+	if len(l) == 0 || len(l) > maxLayerName {
+		return false
+	}
+	for i := range len(l) {
+		c := l[i]
+		if !('A' <= c && c <= 'Z' || '0' <= c && c <= '9' || c == '_' || c == '-') {
+			return false
+		}
+	}
+	return true
+}
+
+// Straight reports whether s is drawn best as a line: a line, or an arc whose
+// sagitta |b| c / 2 is below half a step of the last decimal, so that no digit
+// of the file could tell the two apart.
+func Straight(s fit.Segment) bool {
+	return s.Kind == fit.Line || s.Kind == fit.Arc && math.Abs(s.Bulge)*s.Chord() < fixed.Step
+}
+
+// Has reports whether the path holds a segment of kind k.
+func Has(p *fit.Path, k fit.Kind) bool {
+	for i := range p.Segments {
+		if p.Segments[i].Kind == k {
+			return true
+		}
+	}
+	return false
+}

@@ -1,0 +1,123 @@
+// Package sidecar writes the JSON document that goes with a drawing: the request,
+// every dimension, what was drawn and how far it is from the exact profile, and
+// checksums of the files. Its JSON Schema is part of the package.
+package sidecar
+
+import (
+	_ "embed"
+	"encoding/json"
+	"math"
+	"strconv"
+
+	"flankwright/export"
+	"flankwright/profile"
+)
+
+// SchemaID names the version of the document.
+const SchemaID = "flankwright/sidecar/v1"
+
+// Schema is the JSON Schema of the document.
+//
+//go:embed sidecar.schema.json
+var Schema string
+
+// Document is the sidecar of one part.
+type Document struct {
+	Schema     string              `json:"schema"`
+	Input      map[string]any      `json:"input"`
+	Unit       string              `json:"unit"`
+	BasicRack  map[string]any      `json:"basic_rack"`
+	Dimensions map[string]any      `json:"dimensions"`
+	Outline    map[string]*Outline `json:"outline"`
+	Files      []File              `json:"files"`
+	Warnings   []Warning           `json:"warnings"`
+	Cautions   []string            `json:"cautions"`
+}
+
+// Outline is what one layer holds.
+type Outline struct {
+	Loops          int            `json:"loops"`
+	Entities       map[string]int `json:"entities"`
+	ShortestEntity Value          `json:"shortest_entity"`
+	Area           Value          `json:"area"`
+	Perimeter      Value          `json:"perimeter"`
+	Bounds         Bounds         `json:"bounds"`
+	Closed         bool           `json:"closed"`
+	Tolerance      *Value         `json:"tolerance,omitempty"`
+	Deviation      *Value         `json:"deviation,omitempty"`
+}
+
+// Bounds is the box around a layer.
+type Bounds struct {
+	MinX Value `json:"min_x"`
+	MinY Value `json:"min_y"`
+	MaxX Value `json:"max_x"`
+	MaxY Value `json:"max_y"`
+}
+
+// File describes one file of the set.
+type File struct {
+	Name   string `json:"name"`
+	Format string `json:"format"`
+	Bytes  int    `json:"bytes"`
+	SHA256 string `json:"sha256"`
+}
+
+// Warning is one warning by its code.
+type Warning struct {
+	Code    string `json:"code"`
+	Message string `json:"message"`
+}
+
+// Value is a measured quantity with its unit and symbol.
+type Value struct {
+	Value  Decimal `json:"value"`
+	Unit   string  `json:"unit"`
+	Symbol string  `json:"symbol"`
+}
+
+// Decimal is a number written without exponent.
+type Decimal float64
+
+// decimals is how many decimals are written: as many as in the drawing, few enough
+// that rounding of the last bits does not show on another machine.
+const decimals = 9
+
+// MarshalJSON rounds once.
+func (d Decimal) MarshalJSON() ([]byte, error) {
+	v := float64(d)
+	if math.IsNaN(v) || math.IsInf(v, 0) {
+		return nil, &json.UnsupportedValueError{Str: strconv.FormatFloat(v, 'g', -1, 64)}
+	}
+	rounded, err := strconv.ParseFloat(strconv.FormatFloat(v, 'f', decimals, 64), 64)
+	if err != nil {
+		return nil, err
+	}
+	return strconv.AppendFloat(nil, rounded+0, 'f', -1, 64), nil // +0 turns -0 into 0
+}
+
+// Marshal writes the document, indented, with a final newline.
+func (d *Document) Marshal() ([]byte, error) {
+	data, err := json.MarshalIndent(d, "", "  ")
+	if err != nil {
+		return nil, err
+	}
+	return append(data, '\n'), nil
+}
+
+// value gives a quantity in the unit of the drawing: lengths in it, angles in
+// degrees. Plain numbers stay plain.
+func value(q profile.Quantity, symbol string, unit export.Unit) any {
+	switch q.Dimension {
+	case profile.Length:
+		return length(q.Value, symbol, unit)
+	case profile.Angle:
+		return Value{Decimal(q.Value * 180 / math.Pi), "deg", symbol}
+	}
+	return Decimal(q.Value)
+}
+
+// length gives a length of mm in the unit of the drawing.
+func length(mm float64, symbol string, unit export.Unit) Value {
+	return Value{Decimal(mm * unit.Scale()), unit.String(), symbol}
+}
