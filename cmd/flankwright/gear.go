@@ -1,0 +1,108 @@
+package main
+
+import (
+	"context"
+	"fmt"
+
+	"github.com/spf13/cobra"
+
+	"flankwright/export"
+	"flankwright/export/sidecar"
+	"flankwright/profile"
+	"flankwright/profile/fit"
+)
+
+func newGear(io streams) *cobra.Command {
+	params := gearParameters()
+	cmd := &cobra.Command{
+		Use:   "gear",
+		Short: "An external gear",
+		Long: `Computes an external involute gear as the generating rack would leave it. Without
+-o the dimension table is printed; with -o the drawing and its sidecar are
+written.
+
+` + reading + "\n" + cautions(),
+		Example: `  flankwright gear --module 2 --teeth 24
+  flankwright gear --module 2 --teeth 24 --bore 10 -o gear.dxf -o gear.svg
+  flankwright gear --diametral-pitch 16 --teeth 30 --profile-shift 0.2 --thinning 0.003 -o g.dxf`,
+		Args: noArguments,
+	}
+	flags := define(cmd, params)
+	cmd.RunE = func(cmd *cobra.Command, _ []string) error {
+		return runGear(cmd.Context(), io, newRequest("gear", flags), params)
+	}
+	return cmd
+}
+
+// runGear is the way of a request: defaults, numbers, exact tooth, drawn tooth,
+// sheet, files or table.
+func runGear(ctx context.Context, io streams, req request, params []parameter) error {
+	out, err := readOutput(req)
+	if err != nil {
+		return err
+	}
+	if out.from != "" {
+		defaults, err := readSidecar(out.from, req.command, params)
+		if err != nil {
+			return err
+		}
+		req = req.withDefaults(defaults)
+	}
+	job, err := resolveGear(req)
+	if err != nil {
+		return err
+	}
+	made, err := makeGear(job)
+	if err != nil {
+		return err
+	}
+	return out.deliver(ctx, io, made)
+}
+
+// gearMade is a gear ready to be written or reported.
+type gearMade struct {
+	gear     export.Gear
+	drawing  export.Drawing
+	document *sidecar.Document
+	warnings []profile.Finding
+}
+
+// makeGear solves, fits and lays out. Everything the geometry refuses is reported
+// together, as far as it can be judged.
+func makeGear(j gearJob) (*gearMade, error) {
+	show := sidecar.Show(j.unit)
+	tooth, err := profile.Solve(j.spec)
+	if err != nil {
+		return nil, fromFindings(err, show)
+	}
+	bodyWarnings, found := j.body.Check(tooth)
+	drawn, err := fit.NewTooth(tooth, j.fit)
+	if err != nil {
+		violations, ok := err.(profile.Violations)
+		if !ok {
+			return nil, err
+		}
+		found = append(found, violations...)
+	}
+	if found != nil {
+		return nil, fromFindings(found, show)
+	}
+	m := &gearMade{
+		gear: export.Gear{Tooth: tooth, Drawn: drawn, Body: j.body, Unit: j.unit,
+			Turn: j.turn, Reference: j.reference},
+		warnings: append(tooth.Warnings, bodyWarnings...),
+	}
+	m.drawing = m.gear.Drawing()
+	m.document = sidecar.Gear(j.input, j.rack, m.gear, m.drawing, m.warnings)
+	return m, nil
+}
+
+// title names the gear in one line.
+func (m *gearMade) title() string {
+	d := m.gear.Tooth.Dimensions
+	size := "module " + profile.NumberOf(d.Module).String() + " mm"
+	if m.gear.Unit == export.Inch {
+		size = "diametral pitch " + profile.NumberOf(d.DiametralPitch()).String()
+	}
+	return fmt.Sprintf("external gear, %d teeth, %s", d.Teeth, size)
+}

@@ -1,0 +1,128 @@
+package main
+
+import (
+	"fmt"
+
+	"github.com/spf13/cobra"
+	"github.com/spf13/pflag"
+)
+
+// group is a heading of the help text.
+type group string
+
+const (
+	groupSize    group = "Size, exactly one"
+	groupForm    group = "Form"
+	groupBody    group = "Body"
+	groupDrawing group = "Drawing"
+	groupOutput  group = "Output"
+)
+
+// parameter is one flag. Every value is kept as the text given, so that the
+// command line and a sidecar are read by the same code.
+type parameter struct {
+	name       string
+	short      string
+	group      group
+	value      string // placeholder in the help; "" makes it a switch
+	usage      string
+	repeatable bool
+	transient  bool // says where results go, not what is made: not in a sidecar
+	choices    []string
+}
+
+// gearParameters are the flags of an external gear.
+func gearParameters() []parameter {
+	return []parameter{
+		{name: "module", group: groupSize, value: "L", usage: "module m; makes bare lengths mm"},
+		{name: "diametral-pitch", group: groupSize, value: "P", usage: "teeth per inch of reference diameter; makes bare lengths inch"},
+		{name: "circular-pitch", group: groupSize, value: "L", usage: "pitch along the reference circle; bare lengths take its unit, mm if it has none"},
+
+		{name: "teeth", group: groupForm, value: "N", usage: "number of teeth"},
+		{name: "basic-rack", group: groupForm, value: "NAME", usage: "see flankwright basic-racks (default iso53-a in mm, full-depth-20 in inch)", choices: rackNames()},
+		{name: "pressure-angle", group: groupForm, value: "DEG", usage: "in place of the rack's"},
+		{name: "addendum", group: groupForm, value: "C", usage: "of the rack, in place of its own"},
+		{name: "dedendum", group: groupForm, value: "C", usage: "of the rack, in place of its own"},
+		{name: "root-radius", group: groupForm, value: "C|full", usage: "of the rack; full takes the largest that fits"},
+		{name: "profile-shift", group: groupForm, value: "X", usage: "coefficient x, positive thickens the tooth (default 0)"},
+		{name: "thinning", group: groupForm, value: "L", usage: "takes so much off the tooth thickness on the reference circle (default 0)"},
+		{name: "thinning-by", group: groupForm, value: "WAY", usage: "flank keeps the root circle, infeed deepens it (default flank)", choices: []string{"flank", "infeed"}},
+		{name: "tip-diameter", group: groupForm, value: "L", usage: "in place of the one that follows from rack and shift"},
+		{name: "tip-shortening", group: groupForm, value: "C", usage: "takes so much off the tip radius (default 0)"},
+		{name: "tip-radius", group: groupForm, value: "L", usage: "rounds the tip corners"},
+		{name: "tip-chamfer", group: groupForm, value: "L", usage: "breaks the tip corners, so far along flank and tip circle"},
+		{name: "min-tip-thickness", group: groupForm, value: "C", usage: "lowers the tip where needed to keep so much thickness"},
+
+		{name: "bore", group: groupBody, value: "L", usage: "diameter of a round bore"},
+
+		{name: "curves", group: groupDrawing, value: "KIND", usage: "arcs or lines (default arcs)", choices: []string{"arcs", "lines"}},
+		{name: "tolerance", group: groupDrawing, value: "L", usage: "largest distance between drawn and exact curve (default 1um)"},
+		{name: "reference", group: groupDrawing, usage: "adds reference, base and form circles and the center lines on their own layer"},
+		{name: "unit", group: groupDrawing, value: "UNIT", usage: "mm or in, of the drawing (default that of the size)", choices: []string{"mm", "in"}},
+		{name: "turn", group: groupDrawing, value: "DEG", usage: "turns the part counter-clockwise; tooth 1 is on +Y (default 0)"},
+
+		{name: "output", short: "o", group: groupOutput, value: "PATH", usage: "a .dxf or .svg file, repeatable; the sidecar takes the first one's base name with .json", repeatable: true, transient: true},
+		{name: "json", group: groupOutput, usage: "prints the sidecar to stdout", transient: true},
+		{name: "quiet", group: groupOutput, usage: "prints errors only", transient: true},
+		{name: "from", group: groupOutput, value: "SIDECAR", usage: "takes its input as defaults", transient: true},
+	}
+}
+
+// text is a flag value kept as given. It implements pflag.Value.
+type text struct {
+	values []string
+	param  parameter
+}
+
+// String is the value for the help; flags have no other default than "not given".
+func (t *text) String() string { return "" }
+
+// Type is the placeholder in the help.
+func (t *text) Type() string { return t.param.value }
+
+// Set keeps a value; what it means is judged later, all flags together.
+func (t *text) Set(v string) error {
+	if len(t.values) > 0 && !t.param.repeatable {
+		return fmt.Errorf("given twice")
+	}
+	t.values = append(t.values, v)
+	return nil
+}
+
+// define adds the parameters to a command as flags, and returns where their values
+// will be.
+func define(cmd *cobra.Command, params []parameter) map[string]*text {
+	flags := cmd.Flags()
+	flags.SortFlags = false
+	values := make(map[string]*text, len(params))
+	for _, p := range params {
+		t := &text{param: p}
+		values[p.name] = t
+		f := flags.VarPF(t, p.name, p.short, p.usage)
+		if p.value == "" {
+			f.NoOptDefVal = "true"
+		}
+		f.Annotations = map[string][]string{groupKey: {string(p.group)}}
+		complete := cobra.NoFileCompletions
+		if p.choices != nil {
+			complete = cobra.FixedCompletions(p.choices, cobra.ShellCompDirectiveNoFileComp)
+		}
+		if p.name == "output" || p.name == "from" {
+			continue // files are what the shell completes by itself
+		}
+		// The only error is a flag that was not defined, and it has just been.
+		_ = cmd.RegisterFlagCompletionFunc(p.name, complete)
+	}
+	return values
+}
+
+// groupKey marks a flag's group in its annotations.
+const groupKey = "flankwright_group"
+
+// flagGroup is the group of a flag; "" for those cobra adds.
+func flagGroup(f *pflag.Flag) group {
+	if g := f.Annotations[groupKey]; len(g) > 0 {
+		return group(g[0])
+	}
+	return ""
+}

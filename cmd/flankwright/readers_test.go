@@ -1,0 +1,116 @@
+package main
+
+import (
+	"encoding/json"
+	"math"
+	"os"
+	"path/filepath"
+	"strings"
+	"testing"
+
+	"flankwright/export/dxf"
+	"flankwright/export/readertest"
+	"flankwright/export/svg"
+)
+
+// TestReadersTakeRealGears writes gears as the command does and has every outside
+// reader compare loops, closure, area, unit and layers.
+func TestReadersTakeRealGears(t *testing.T) {
+	for name, args := range map[string][]string{
+		"metric":   {"--module", "2", "--teeth", "24", "--bore", "10"},
+		"inch":     {"--diametral-pitch", "16", "--teeth", "30", "--profile-shift", "0.2", "--thinning", "0.003", "--reference"},
+		"undercut": {"--module", "1.5", "--teeth", "9", "--tip-radius", "0.1", "--turn", "12.5"},
+		"lines":    {"--module", "1", "--teeth", "17", "--curves", "lines", "--bore", "5", "--tolerance", "5um"},
+	} {
+		t.Run(name, func(t *testing.T) {
+			t.Parallel()
+			dir := t.TempDir()
+			for _, format := range []string{"dxf", "svg"} {
+				path := filepath.Join(dir, "gear."+format)
+				code, _, stderr := call(t, append([]string{"gear", "-o", path}, args...)...)
+				if code != exitDone {
+					t.Fatalf("exit %d: %s", code, stderr)
+				}
+				made := makeFor(t, args)
+				want := readertest.DXFExpect(made.drawing, dxf.Options{})
+				if format == "dxf" {
+					readertest.DXF(t, path, want)
+				} else {
+					readertest.SVG(t, path, want, svg.DefaultStrokeWidth*made.drawing.Unit.Scale())
+				}
+			}
+		})
+	}
+}
+
+// makeFor makes the gear a command line asks for, in this process.
+func makeFor(t *testing.T, args []string) *gearMade {
+	t.Helper()
+	cmd := newGear(streams{})
+	flags := map[string]*text{}
+	for _, p := range gearParameters() {
+		flags[p.name] = cmd.Flags().Lookup(p.name).Value.(*text)
+	}
+	if err := cmd.ParseFlags(args); err != nil {
+		t.Fatal(err)
+	}
+	job, err := resolveGear(newRequest("gear", flags))
+	if err != nil {
+		t.Fatal(err)
+	}
+	made, err := makeGear(job)
+	if err != nil {
+		t.Fatal(err)
+	}
+	return made
+}
+
+// TestBothUnitSystems: 16 P and module 1.5875 with the same rack are one outline to
+// 1e-12 m, and --unit scales numbers and header together.
+func TestBothUnitSystems(t *testing.T) {
+	inch := makeFor(t, []string{"--diametral-pitch", "16", "--teeth", "30", "--profile-shift", "0.2"})
+	metric := makeFor(t, []string{"--module", "1.5875", "--basic-rack", "full-depth-20", "--teeth", "30", "--profile-shift", "0.2"})
+	a, b := inch.drawing.Items[0].Path.Segments, metric.drawing.Items[0].Path.Segments
+	if len(a) != len(b) {
+		t.Fatalf("%d and %d segments", len(a), len(b))
+	}
+	const same = 1e-9 // mm, 1e-12 m
+	for i := range a {
+		if off := math.Hypot(a[i].Start.X-b[i].Start.X, a[i].Start.Y-b[i].Start.Y); off > same {
+			t.Fatalf("segment %d starts %g mm apart", i, off)
+		}
+	}
+
+	dir := t.TempDir()
+	for unit, want := range map[string]float64{"mm": 25.4, "in": 1} {
+		path := filepath.Join(dir, unit+".dxf")
+		if code, _, stderr := call(t, "gear", "--diametral-pitch", "16", "--teeth", "30", "--unit", unit, "-o", path); code != exitDone {
+			t.Fatal(stderr)
+		}
+		data, err := os.ReadFile(path)
+		if err != nil {
+			t.Fatal(err)
+		}
+		// Tip diameter (30 + 2)/16 inch.
+		insunits := map[string]string{"mm": "4", "in": "1"}[unit]
+		if !strings.Contains(string(data), "$INSUNITS\n70\n"+insunits+"\n") {
+			t.Errorf("%s: $INSUNITS is not %s", unit, insunits)
+		}
+		var doc struct {
+			Dimensions struct {
+				TipDiameter struct{ Value float64 } `json:"tip_diameter"`
+			} `json:"dimensions"`
+		}
+		sidecar, err := os.ReadFile(filepath.Join(dir, unit+".json"))
+		if err != nil {
+			t.Fatal(err)
+		}
+		if err := json.Unmarshal(sidecar, &doc); err != nil {
+			t.Fatal(err)
+		}
+		const digits = 1e-9
+		if got := doc.Dimensions.TipDiameter.Value; math.Abs(got-2*want) > digits {
+			t.Errorf("%s: tip diameter %g, want %g", unit, got, 2*want)
+		}
+	}
+}
