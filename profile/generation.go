@@ -35,6 +35,9 @@ func newGeneration(s Spec) generation {
 		g.widening = 0
 	}
 	g.psiBase = thickness(s)/(2*g.r) + Inv(g.alpha)
+	if g.rho < noise*g.m {
+		g.rho = 0
+	}
 	g.place()
 	return g
 }
@@ -48,9 +51,15 @@ func thickness(s Spec) float64 {
 //
 //	w  = pi m/4 + E_f/2 - (h - rho) tan alpha - rho/cos alpha
 //	vc = x_e m - h + rho
+//
+// A sharp corner that misses the pitch line by rounding noise lies on it, so that
+// no fillet of such a length is drawn.
 func (g *generation) place() {
 	g.w = math.Pi*g.m/4 + g.widening/2 - (g.h-g.rho)*g.tan - g.rho/math.Cos(g.alpha)
 	g.vc = g.shift - g.h + g.rho
+	if g.rho == 0 && math.Abs(g.vc) < noise*g.m {
+		g.vc = 0
+	}
 }
 
 // roundRackTip settles the rounding of the rack's tip: as asked, the full radius,
@@ -64,7 +73,7 @@ func (g *generation) roundRackTip(s Spec) (found []Finding, warning bool) {
 			Hint: "the dedendum can be at most {bound}; lower --dedendum or --pressure-angle"}}, false
 	}
 	switch {
-	case s.Rounding == RoundingFull || math.Abs(g.rho-full) <= flatSlack*g.m:
+	case s.Rounding == RoundingFull || math.Abs(g.rho-full) <= noise*g.m:
 		g.fullRound(full)
 	case g.rho < full:
 	case s.Rounding == RoundingExplicit:
@@ -79,9 +88,10 @@ func (g *generation) roundRackTip(s Spec) (found []Finding, warning bool) {
 	return found, true
 }
 
-// flatSlack is how near to the full radius, in modules, a rounding counts as full:
-// above the rounding noise of both, far below a flat anyone could mean.
-const flatSlack = 1e-12
+// noise is the length in modules below which a part of the rack counts as nothing:
+// far above what rounding leaves of sums of a few modules, 1e-15, far below what
+// anyone could mean.
+const noise = 1e-13
 
 // fullRound takes the full radius, at which the flat of the rack's tip vanishes:
 // w is set to exactly zero, where place would leave rounding noise of either sign.

@@ -70,7 +70,7 @@ func TestLoweredRoundingIsWarnedOnly(t *testing.T) {
 // for its rounding as a double leaves no root arc, whichever way it was asked for:
 // a flat of 1e-17 mm is no curve to draw.
 func TestFullRadiusLeavesNoSliver(t *testing.T) {
-	least := 1e-12 // modules; see flatSlack
+	least := 1e-13 // modules; see noise
 	slivers := func(s profile.Spec) {
 		t.Helper()
 		tooth := solve(t, s)

@@ -6,7 +6,7 @@ import "math"
 // The whole outline is its left half, the mirror image of it, and their
 // rotations.
 type Tooth struct {
-	Spec       Spec // with the rounding and tip diameter as made
+	Spec       Spec // with the rounding as made
 	Dimensions Dimensions
 	Warnings   []Finding
 

@@ -152,11 +152,6 @@ func (s Segment) arcBounds(b *r2.Box) {
 	}
 }
 
-// startHeading is the direction of travel at Start of a line or an arc, in rad.
-func (s Segment) startHeading() float64 {
-	return math.Atan2(s.End.Y-s.Start.Y, s.End.X-s.Start.X) - s.Included()/2
-}
-
 // Reversed is the same piece travelled from End to Start.
 func (s Segment) Reversed() Segment {
 	return Segment{Kind: s.Kind, Start: s.End, End: s.Start, Bulge: -s.Bulge, C1: s.C2, C2: s.C1}

@@ -1,0 +1,41 @@
+package main
+
+import (
+	"strconv"
+	"testing"
+)
+
+// BenchmarkGear takes a request through solve, fit and the bytes of DXF, SVG and
+// sidecar.
+func BenchmarkGear(b *testing.B) {
+	for _, teeth := range []int{24, 200} {
+		b.Run("z"+strconv.Itoa(teeth), func(b *testing.B) {
+			req := request{command: "gear", values: map[string][]string{"module": {"2"}, "teeth": {strconv.Itoa(teeth)}, "bore": {"10"}}}
+			o := output{paths: []string{"gear.dxf", "gear.svg"}}
+			b.ReportAllocs()
+			for b.Loop() {
+				job, err := resolveGear(req)
+				if err != nil {
+					b.Fatal(err)
+				}
+				made, err := makeGear(job)
+				if err != nil {
+					b.Fatal(err)
+				}
+				set, err := o.render(made)
+				if err != nil {
+					b.Fatal(err)
+				}
+				document, err := made.document.Marshal()
+				if err != nil {
+					b.Fatal(err)
+				}
+				bytes := len(document)
+				for _, f := range set {
+					bytes += len(f.Data)
+				}
+				b.SetBytes(int64(bytes))
+			}
+		})
+	}
+}
