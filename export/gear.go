@@ -16,20 +16,8 @@ type Gear struct {
 	Body      profile.Body
 	Unit      Unit
 	Turn      float64 // rad, counter-clockwise
-	Reference bool    // whether the reference circles are shown
-}
-
-// axes are the two center lines, as long as the tip circle is wide, one of them
-// through the middle of tooth 1.
-func (g Gear) axes() []Item {
-	var items []Item
-	for _, quarter := range [2]float64{0, math.Pi / 2} {
-		sin, cos := math.Sincos(g.Turn + quarter)
-		end := r2.Scale(g.Tooth.Dimensions.TipDiameter/2, r2.Vec{X: cos, Y: sin})
-		line := fit.Path{Segments: []fit.Segment{fit.LineTo(r2.Scale(-1, end), end)}}
-		items = append(items, Item{Layer: LayerReference, Role: Marker, Path: &line})
-	}
-	return items
+	Extent    fit.Extent
+	Reference bool // whether reference circles and center lines are shown
 }
 
 // Drawing lays the gear out: bore, outline, then what is not to be cut.
@@ -38,13 +26,34 @@ func (g Gear) Drawing() Drawing {
 	if g.Body.Bore > 0 {
 		d.Items = append(d.Items, Item{Layer: LayerBore, Role: Hole, Circle: &Circle{Radius: g.Body.Bore / 2}})
 	}
-	outline := g.Drawn.Outline(g.Turn)
+	outline := g.Drawn.Outline(g.Extent, g.Turn)
 	d.Items = append(d.Items, Item{Layer: LayerOutline, Role: Outer, Path: &outline})
 	if g.Reference {
 		for _, c := range g.Tooth.ReferenceCircles() {
 			d.Items = append(d.Items, Item{Layer: LayerReference, Role: Marker, Circle: &Circle{Radius: c.Radius}})
 		}
-		d.Items = append(d.Items, g.axes()...)
+		for _, angle := range [2]float64{0, math.Pi / 2} {
+			d.Items = append(d.Items, marker(g.ray(angle+math.Pi), g.ray(angle)))
+		}
+	}
+	if g.Extent.Partial() {
+		from, to := g.Extent.Limits(g.Tooth.Pitch())
+		d.Items = append(d.Items, marker(g.ray(from), r2.Vec{}, g.ray(to)))
 	}
 	return d
+}
+
+// ray is the point of the tip circle at an angle from +Y.
+func (g Gear) ray(angle float64) r2.Vec {
+	sin, cos := math.Sincos(math.Pi/2 + g.Turn + angle)
+	return r2.Scale(g.Tooth.Dimensions.TipDiameter/2, r2.Vec{X: cos, Y: sin})
+}
+
+// marker is an open chain of straight lines that is not an edge of the part.
+func marker(points ...r2.Vec) Item {
+	var path fit.Path
+	for i := 1; i < len(points); i++ {
+		path.Segments = append(path.Segments, fit.LineTo(points[i-1], points[i]))
+	}
+	return Item{Layer: LayerReference, Role: Marker, Path: &path}
 }

@@ -2,8 +2,10 @@ package profile_test
 
 import (
 	"math"
+	"reflect"
 	"testing"
 
+	"gonum.org/v1/gonum/spatial/r2"
 	"pgregory.net/rapid"
 
 	"flankwright/profile"
@@ -20,6 +22,8 @@ import (
 //	4  More profile shift makes the tooth thicker at every radius both have.
 //	5  Flanks do not depend on the rack's dedendum and rounding.
 //	6  With ever more teeth the flank goes over into the rack's straight one.
+//	7  A tip rounding or chamfer only takes material off, and the largest that fits
+//	   is the bound it is refused with.
 
 // anySpec draws a spec from the whole range, mostly near what gears are like.
 func anySpec() *rapid.Generator[profile.Spec] {
@@ -57,6 +61,209 @@ func TestProperty1Verdict(t *testing.T) {
 		const points = 16
 		if err := compare(anySpec().Draw(t, "spec"), points); err != nil {
 			t.Fatal(err)
+		}
+	})
+}
+
+// scaled is the spec with every length k times as large.
+func scaled(s profile.Spec, k float64) profile.Spec {
+	for _, v := range []*float64{&s.Module, &s.Rack.Addendum, &s.Rack.Dedendum, &s.Rack.RootRadius, &s.Thinning,
+		&s.TipDiameter, &s.TipShortening, &s.TipRadius, &s.TipChamfer, &s.MinTipThickness} {
+		*v *= k
+	}
+	return s
+}
+
+// TestProperty2Scaling scales by powers of two, which changes no rounding, so the
+// results must be equal to the last bit.
+func TestProperty2Scaling(t *testing.T) {
+	t.Parallel()
+	rapid.Check(t, func(t *rapid.T) {
+		s := anySpec().Draw(t, "spec")
+		k := math.Ldexp(1, rapid.IntRange(-10, 10).Draw(t, "power of two"))
+		big := scaled(s, k)
+		if big.Module < profile.MinModule || big.Module > profile.MaxModule {
+			t.Skip("outside the range")
+		}
+		a, errA := profile.Solve(s)
+		b, errB := profile.Solve(big)
+		if (errA == nil) != (errB == nil) {
+			t.Fatalf("%v, but %v at %v times the size", errA, errB, k)
+		}
+		if errA != nil {
+			return
+		}
+		for i := range a.Side {
+			for _, share := range []float64{0, 0.3, 1} {
+				p, q := pointAt(a.Side[i].Curve, share), pointAt(b.Side[i].Curve, share)
+				if q.X != p.X*k || q.Y != p.Y*k {
+					t.Fatalf("part %d at %v: %v, %v times as large %v", a.Side[i].Part, share, p, k, q)
+				}
+			}
+		}
+		da, db := a.Dimensions, b.Dimensions
+		if da.TipThickness*k != db.TipThickness || da.RootDiameter*k != db.RootDiameter || da.FormDiameter*k != db.FormDiameter ||
+			da.MinFilletRadius*k != db.MinFilletRadius || len(a.Warnings) != len(b.Warnings) {
+			t.Fatalf("%+v\n%v times as large\n%+v", da, k, db)
+		}
+	})
+}
+
+// pointAt is the point at a share of the curve's domain.
+func pointAt(c profile.Curve, share float64) r2.Vec {
+	from, to := c.Domain()
+	return c.At(from + (to-from)*share)
+}
+
+func TestProperty3Idempotent(t *testing.T) {
+	t.Parallel()
+	rapid.Check(t, func(t *rapid.T) {
+		a, err := profile.Solve(anySpec().Draw(t, "spec"))
+		if err != nil {
+			return
+		}
+		b, err := profile.Solve(a.Spec)
+		if err != nil {
+			t.Fatal(err)
+		}
+		if !reflect.DeepEqual(a.Side, b.Side) || a.Land != b.Land || a.Dimensions != b.Dimensions || !reflect.DeepEqual(a.Root, b.Root) {
+			t.Fatalf("%+v\nsolved again is\n%+v", a, b)
+		}
+		if _, again := pick(b.Warnings, profile.RuleRoundingLowered); again {
+			t.Fatal("the lowered rounding is lowered again")
+		}
+		if d := a.Dimensions; a.Spec.TipDiameter != 0 && math.Abs(d.TipDiameter-a.Spec.TipDiameter) > rounding*d.TipDiameter {
+			t.Fatalf("tip %v for %v", d.TipDiameter, a.Spec.TipDiameter)
+		}
+	})
+}
+
+// thicknessAt is the tooth's half angle at a radius, from the points of its side;
+// false where no flank is.
+func thicknessAt(flank profile.Involute, radius float64) (float64, bool) {
+	roll := math.Sqrt(math.Max(0, math.Pow(radius/flank.BaseRadius, 2)-1))
+	if roll > flank.From || roll < flank.To {
+		return 0, false
+	}
+	p := flank.At(roll)
+	return math.Atan2(-p.X, p.Y), true
+}
+
+func TestProperty4Shift(t *testing.T) {
+	t.Parallel()
+	rapid.Check(t, func(t *rapid.T) {
+		s := anySpec().Draw(t, "spec")
+		a, err := profile.Solve(s)
+		more := rapid.Float64Range(1e-6, 0.5).Draw(t, "more shift")
+		s.ProfileShift += more
+		b, errB := profile.Solve(s)
+		if err != nil || errB != nil {
+			return
+		}
+		thin, thick := flankOf(t, a), flankOf(t, b)
+		for _, share := range []float64{0, 0.25, 0.5, 0.75, 1} {
+			radius := norm(pointAt(thin, share))
+			p, ok := thicknessAt(thin, radius)
+			q, both := thicknessAt(thick, radius)
+			// s grows by 2 x m tan alpha (ISO 21771:2007, 5.4.2).
+			want := p + 2*more*math.Tan(s.Rack.PressureAngle)/float64(s.Teeth)
+			if ok && both && math.Abs(q-want) > tangent {
+				t.Fatalf("half angle at %v is %v with %v more shift than at %v, want %v", radius, q, more, p, want)
+			}
+		}
+	})
+}
+
+func TestProperty5FlankAlone(t *testing.T) {
+	t.Parallel()
+	rapid.Check(t, func(t *rapid.T) {
+		s := anySpec().Draw(t, "spec")
+		other := s
+		other.Rack.Dedendum = s.Module * rapid.Float64Range(0.8, 1.6).Draw(t, "dedendum")
+		other.Rack.RootRadius = s.Module * rapid.Float64Range(0, 0.4).Draw(t, "root radius")
+		other.Rounding = profile.RoundingDefault
+		other.ThinningBy = profile.ThinByInfeed
+		a, err := profile.Solve(s)
+		b, errB := profile.Solve(other)
+		if err != nil || errB != nil {
+			return
+		}
+		p, q := flankOf(t, a), flankOf(t, b)
+		if p.BaseRadius != q.BaseRadius || p.BaseHalfAngle != q.BaseHalfAngle || p.From != q.From || a.Land != b.Land {
+			t.Fatalf("flanks %+v and %+v", p, q)
+		}
+	})
+}
+
+// TestProperty6RackLimit compares the flank of ever more teeth with the straight
+// flank of the rack: the half thickness at the height y is pi m/4 + (x m - y) tan
+// alpha but for the curvature of circle and flank, which is of the order y^2/r.
+func TestProperty6RackLimit(t *testing.T) {
+	for _, z := range []int{50, 200, 1000, 2000} {
+		s := gear("iso53-a", 2, z, 0.2)
+		tooth := solve(t, s)
+		flank := flankOf(t, tooth)
+		r := tooth.Dimensions.ReferenceDiameter / 2
+		for _, u := range along(flank, 10) {
+			p := flank.At(u)
+			y := p.Y - r
+			straight := math.Pi/2 + (0.4-y)*math.Tan(20*degree)
+			const depth = 2.6 // mm, the largest |y|
+			// Sagitta of the circle and of the flank, whose radius is r sin alpha.
+			near(t, "half thickness", -p.X, straight, depth*depth/r/math.Sin(20*degree))
+		}
+	}
+}
+
+// TestProperty7TipShape puts roundings and chamfers on teeth that can be made
+// without: what is too large is refused with the largest, which can be made; what
+// is made lies inside the tooth without.
+func TestProperty7TipShape(t *testing.T) {
+	t.Parallel()
+	rapid.Check(t, func(t *rapid.T) {
+		s := anySpec().Draw(t, "spec")
+		plain, err := profile.Solve(s)
+		if err != nil {
+			return
+		}
+		size := plain.Dimensions.TipThickness * rapid.Float64Range(0, 1.5).Draw(t, "size")
+		rule, at := profile.RuleTipRadiusTooLarge, &s.TipRadius
+		if rapid.Bool().Draw(t, "chamfer") {
+			rule, at = profile.RuleTipChamferTooLarge, &s.TipChamfer
+		}
+		*at = math.Min(size, 3*s.Module)
+		tooth, err := profile.Solve(s)
+		if err != nil {
+			f, ok := finding(err, rule)
+			if !ok || !(f.Bound.Value <= *at) {
+				t.Fatal(err)
+			}
+			// Where doubles are too coarse for the share, there is nothing to make.
+			*at = f.Bound.Value * (1 - 1e-6)
+			if tooth, err = profile.Solve(s); err != nil {
+				if f.Bound.Value < 1e-6*s.Module {
+					return
+				}
+				t.Fatalf("the bound of %v: %v", f, err)
+			}
+		}
+		if err := sound(tooth); err != nil {
+			t.Fatal(err)
+		}
+		if err := swept(tooth, 6); err != nil {
+			t.Fatal(err)
+		}
+		// Inside the flank: at every radius nearer to the tooth's middle.
+		flank := flankOf(t, plain)
+		flank.From, flank.To = flank.From*2, 0
+		for _, u := range along(tooth.Side[0].Curve, 8) {
+			p := tooth.Side[0].Curve.At(u)
+			if limit, ok := thicknessAt(flank, norm(p)); ok && math.Atan2(-p.X, p.Y) > limit+tangent {
+				t.Fatalf("%v lies outside the flank", p)
+			}
+			if norm(p) > plain.Dimensions.TipDiameter/2*(1+rounding) {
+				t.Fatalf("%v lies outside the tip circle", p)
+			}
 		}
 	})
 }

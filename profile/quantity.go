@@ -66,21 +66,33 @@ func (q Quantity) String() string {
 // decimals would leave none of a value that is not zero.
 func (q Quantity) Decimal(scale float64, decimals int) string {
 	v := q.Value * scale
-	unit := math.Pow10(decimals)
-	round := math.Round
-	// A bound that misses a printable value only by rounding noise is that value.
-	if off := v*unit - math.Round(v*unit); math.Abs(off) > printNoise {
-		switch q.Toward {
-		case Upward:
-			round = math.Ceil
-		case Downward:
-			round = math.Floor
-		}
+	if v == 0 {
+		return "0"
 	}
-	if rounded := round(v*unit) / unit; rounded != 0 || v == 0 {
+	if rounded := q.round(v, math.Pow10(decimals)); rounded != 0 {
 		return strconv.FormatFloat(rounded, 'f', -1, 64)
 	}
+	first := int(math.Floor(math.Log10(math.Abs(v))))
+	const longest = 12 // decimals; beyond them an exponent reads better than zeros
+	if first >= -longest {
+		return strconv.FormatFloat(q.round(v, math.Pow10(decimals-1-first)), 'f', -1, 64)
+	}
 	return strconv.FormatFloat(v, 'g', decimals, 64)
+}
+
+// round rounds v to a multiple of 1/unit the way the quantity asks. A bound that
+// misses a multiple only by rounding noise is that multiple.
+func (q Quantity) round(v, unit float64) float64 {
+	nearest := math.Round(v * unit)
+	if math.Abs(v*unit-nearest) > printNoise {
+		switch q.Toward {
+		case Upward:
+			nearest = math.Ceil(v * unit)
+		case Downward:
+			nearest = math.Floor(v * unit)
+		}
+	}
+	return nearest / unit
 }
 
 // printNoise is the part of the last printed digit within which a value counts

@@ -164,8 +164,14 @@ func pick(all []profile.Finding, rule profile.Rule) (profile.Finding, bool) {
 	return profile.Finding{}, false
 }
 
+// failer is what helpers need of a test.
+type failer interface {
+	Helper()
+	Fatal(...any)
+}
+
 // flankOf and filletOf are the exact curves of a tooth's side.
-func flankOf(t testing.TB, tooth *profile.Tooth) profile.Involute {
+func flankOf(t failer, tooth *profile.Tooth) profile.Involute {
 	t.Helper()
 	for _, p := range tooth.Side {
 		if c, ok := p.Curve.(profile.Involute); ok {
@@ -176,7 +182,7 @@ func flankOf(t testing.TB, tooth *profile.Tooth) profile.Involute {
 	return profile.Involute{}
 }
 
-func filletOf(t testing.TB, tooth *profile.Tooth) profile.Fillet {
+func filletOf(t failer, tooth *profile.Tooth) profile.Fillet {
 	t.Helper()
 	for _, p := range tooth.Side {
 		if c, ok := p.Curve.(profile.Fillet); ok {

@@ -80,7 +80,7 @@ func (g generation) checkRoot(s Spec, r root, tip float64) Violations {
 	clear := NumberOf(s.Rack.ShiftWithoutUndercut(g.m, s.Teeth) + (s.ProfileShift*g.m-g.shift)/g.m).AtLeast()
 	if waist := r.waist(tip); waist <= 0 {
 		return Violations{{Rule: RuleToothSevered, Param: ParamProfileShift, Value: NumberOf(s.ProfileShift), Bound: clear,
-			Text: "undercut cuts the tooth off at its root: its two fillets cross",
+			Text: "undercut cuts the tooth off at its root at a profile shift of {value}: its two fillets cross",
 			Hint: "a profile shift of {bound} or more avoids undercut; a smaller --dedendum or more teeth lessen it"}}
 	}
 	if r.formRadius < tip {
@@ -89,7 +89,7 @@ func (g generation) checkRoot(s Spec, r root, tip float64) Violations {
 	if r.undercut {
 		return Violations{{Rule: RuleNoFlank, Param: ParamProfileShift, Value: NumberOf(s.ProfileShift), Bound: clear,
 			Also: []Quantity{LengthOf(2 * r.formRadius), LengthOf(2 * tip)},
-			Text: "undercut leaves no flank: it reaches to diameter {0}, and the tip diameter is {1}",
+			Text: "undercut at a profile shift of {value} leaves no flank: it reaches to diameter {0}, and the tip diameter is {1}",
 			Hint: "a profile shift of {bound} or more avoids undercut"}}
 	}
 	return Violations{{Rule: RuleTipBelowRoot, Param: ParamTipDiameter, Value: LengthOf(2 * tip), Bound: LengthOf(2 * r.formRadius).AtLeast(),

@@ -27,10 +27,14 @@ func (g generation) tipRadius(s Spec) (radius float64, warnings []Finding, found
 		radius = g.r + s.Rack.Addendum + s.ProfileShift*g.m - s.TipShortening
 	}
 	if radius <= g.rb {
+		form := g.rb
+		if g.w >= 0 && g.rootRadius() > 0 { // else that is refused as well
+			form = math.Max(form, g.solveRoot().formRadius)
+		}
 		return radius, nil, Violations{{Rule: RuleBaseAboveTip, Param: ParamTipDiameter,
-			Value: LengthOf(2 * radius), Bound: LengthOf(2 * g.rb).AtLeast(),
-			Text: "the tip diameter {value} lies at or below the base circle {bound}, so there is no involute flank",
-			Hint: "the tip must lie above {bound}: raise --profile-shift, --addendum or --tip-diameter, or lower --pressure-angle"}}
+			Value: LengthOf(2 * radius), Bound: LengthOf(2 * form).AtLeast(), Also: []Quantity{LengthOf(2 * g.rb)},
+			Text: "the tip diameter {value} lies at or below the base circle {0}, so there is no involute flank",
+			Hint: "the tip must lie above {bound}, where the flank would end: raise --profile-shift, --addendum or --tip-diameter, or lower --pressure-angle"}}
 	}
 	least := s.MinTipThickness
 	if 2*radius*g.halfAngle(radius) > least || (least > 0 && 2*radius*g.halfAngle(radius) == least) {
@@ -80,6 +84,11 @@ func (g generation) refuseTip(s Spec, radius float64) Violations {
 			Also: []Quantity{LengthOf(2 * radius)},
 			Text: "the tooth is only {bound} thick at the tip diameter {0}, not {value}",
 			Hint: "lower the tip diameter or --min-tip-thickness"}}
+	}
+	if pointed == 0 {
+		return Violations{{Rule: RulePointedTip, Param: ParamProfileShift, Value: NumberOf(s.ProfileShift),
+			Text: "the tooth has no thickness anywhere above its base circle at a profile shift of {value}",
+			Hint: "raise --profile-shift, or lower --thinning or --pressure-angle"}}
 	}
 	return Violations{{Rule: RulePointedTip, Param: ParamTipDiameter, Value: LengthOf(2 * radius), Bound: LengthOf(2 * pointed).AtMost(),
 		Text: "the tooth is pointed: its flanks meet at diameter {bound}, below the tip diameter {value}",

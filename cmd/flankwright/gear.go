@@ -7,6 +7,7 @@ import (
 	"github.com/spf13/cobra"
 
 	"flankwright/export"
+	"flankwright/export/dxf"
 	"flankwright/export/sidecar"
 	"flankwright/profile"
 	"flankwright/profile/fit"
@@ -63,6 +64,7 @@ func runGear(ctx context.Context, io streams, req request, params []parameter) e
 type gearMade struct {
 	gear     export.Gear
 	drawing  export.Drawing
+	dxf      dxf.Options
 	document *sidecar.Document
 	warnings []profile.Finding
 }
@@ -89,7 +91,8 @@ func makeGear(j gearJob) (*gearMade, error) {
 	}
 	m := &gearMade{
 		gear: export.Gear{Tooth: tooth, Drawn: drawn, Body: j.body, Unit: j.unit,
-			Turn: j.turn, Reference: j.reference},
+			Extent: j.extent, Turn: j.turn, Reference: j.reference},
+		dxf:      j.dxf,
 		warnings: append(tooth.Warnings, bodyWarnings...),
 	}
 	m.drawing = m.gear.Drawing()

@@ -10,7 +10,6 @@ import (
 	"path/filepath"
 	"strings"
 
-	"flankwright/export"
 	"flankwright/export/dxf"
 	"flankwright/export/files"
 	"flankwright/export/sidecar"
@@ -126,7 +125,7 @@ func (o output) deliver(ctx context.Context, io streams, m *gearMade) error {
 func (o output) render(m *gearMade) ([]files.File, error) {
 	var set []files.File
 	for _, path := range o.paths {
-		data, err := marshal(formatOf(path), m.drawing)
+		data, err := m.marshal(formatOf(path))
 		if err != nil {
 			return nil, problems{{flag: "output", value: path, message: err.Error(), exit: exitGeometry}}
 		}
@@ -138,12 +137,12 @@ func (o output) render(m *gearMade) ([]files.File, error) {
 	return set, nil
 }
 
-// marshal writes a drawing in the format.
-func marshal(format string, d export.Drawing) ([]byte, error) {
+// marshal writes the drawing in the format.
+func (m *gearMade) marshal(format string) ([]byte, error) {
 	if format == "svg" {
-		return svg.Marshal(d, svg.Options{})
+		return svg.Marshal(m.drawing, svg.Options{})
 	}
-	return dxf.Marshal(d, dxf.Options{})
+	return dxf.Marshal(m.drawing, m.dxf)
 }
 
 // printFiles reports what was written, with the size to check after import.

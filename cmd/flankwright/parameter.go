@@ -55,10 +55,13 @@ func gearParameters() []parameter {
 
 		{name: "bore", group: groupBody, value: "L", usage: "diameter of a round bore"},
 
-		{name: "curves", group: groupDrawing, value: "KIND", usage: "arcs or lines (default arcs)", choices: []string{"arcs", "lines"}},
+		{name: "curves", group: groupDrawing, value: "KIND", usage: "arcs, cubics or lines (default arcs)", choices: []string{"arcs", "cubics", "lines"}},
 		{name: "tolerance", group: groupDrawing, value: "L", usage: "largest distance between drawn and exact curve (default 1um)"},
+		{name: "extent", group: groupDrawing, value: "PART", usage: "all, tooth, space or a number of teeth, as an open chain with its radial limits (default all)", choices: []string{"all", "tooth", "space"}},
 		{name: "reference", group: groupDrawing, usage: "adds reference, base and form circles and the center lines on their own layer"},
 		{name: "unit", group: groupDrawing, value: "UNIT", usage: "mm or in, of the drawing (default that of the size)", choices: []string{"mm", "in"}},
+		{name: "dxf", group: groupDrawing, value: "VERSION", usage: "r2000 or r12 (default r2000)", choices: []string{"r2000", "r12"}},
+		{name: "loose", group: groupDrawing, usage: "writes DXF outlines as single lines and arcs, not as polylines"},
 		{name: "turn", group: groupDrawing, value: "DEG", usage: "turns the part counter-clockwise; tooth 1 is on +Y (default 0)"},
 
 		{name: "output", short: "o", group: groupOutput, value: "PATH", usage: "a .dxf or .svg file, repeatable; the sidecar takes the first one's base name with .json", repeatable: true, transient: true},

@@ -8,7 +8,6 @@ import (
 	"strings"
 	"testing"
 
-	"flankwright/export/dxf"
 	"flankwright/export/readertest"
 	"flankwright/export/svg"
 )
@@ -21,6 +20,21 @@ func TestReadersTakeRealGears(t *testing.T) {
 		"inch":     {"--diametral-pitch", "16", "--teeth", "30", "--profile-shift", "0.2", "--thinning", "0.003", "--reference"},
 		"undercut": {"--module", "1.5", "--teeth", "9", "--tip-radius", "0.1", "--turn", "12.5"},
 		"lines":    {"--module", "1", "--teeth", "17", "--curves", "lines", "--bore", "5", "--tolerance", "5um"},
+
+		// every combination of curves, version and extent that a request can have
+		"arcs-tooth":      {"--module", "2", "--teeth", "24", "--extent", "tooth"},
+		"arcs-space":      {"--module", "2", "--teeth", "24", "--extent", "space"},
+		"arcs-loose":      {"--module", "2", "--teeth", "24", "--bore", "10", "--loose"},
+		"arcs-r12":        {"--module", "2", "--teeth", "24", "--bore", "10", "--dxf", "r12"},
+		"arcs-r12-loose":  {"--module", "2", "--teeth", "24", "--bore", "10", "--dxf", "r12", "--loose"},
+		"arcs-r12-3":      {"--module", "2", "--teeth", "24", "--dxf", "r12", "--extent", "3"},
+		"cubics":          {"--module", "2", "--teeth", "24", "--bore", "10", "--curves", "cubics", "--tip-radius", "0.2"},
+		"cubics-tooth":    {"--module", "2", "--teeth", "24", "--curves", "cubics", "--extent", "tooth"},
+		"cubics-3":        {"--module", "2", "--teeth", "24", "--curves", "cubics", "--extent", "3"},
+		"lines-tooth":     {"--module", "2", "--teeth", "24", "--curves", "lines", "--extent", "tooth"},
+		"lines-loose":     {"--module", "2", "--teeth", "12", "--curves", "lines", "--loose", "--tolerance", "10um"},
+		"lines-r12":       {"--module", "2", "--teeth", "24", "--curves", "lines", "--dxf", "r12"},
+		"lines-r12-space": {"--module", "2", "--teeth", "24", "--curves", "lines", "--dxf", "r12", "--extent", "space", "--loose"},
 	} {
 		t.Run(name, func(t *testing.T) {
 			t.Parallel()
@@ -32,7 +46,7 @@ func TestReadersTakeRealGears(t *testing.T) {
 					t.Fatalf("exit %d: %s", code, stderr)
 				}
 				made := makeFor(t, args)
-				want := readertest.DXFExpect(made.drawing, dxf.Options{})
+				want := readertest.DXFExpect(made.drawing, made.dxf)
 				if format == "dxf" {
 					readertest.DXF(t, path, want)
 				} else {

@@ -45,6 +45,7 @@ type Outline struct {
 	Closed         bool           `json:"closed"`
 	Tolerance      *Value         `json:"tolerance,omitempty"`
 	Deviation      *Value         `json:"deviation,omitempty"`
+	ArcLimit       int            `json:"arc_limit,omitempty"`
 }
 
 // Bounds is the box around a layer.

@@ -36,6 +36,7 @@ func Gear(input map[string]any, rack Rack, g export.Gear, d export.Drawing, warn
 			tolerance := length(g.Drawn.Tolerance, "e", d.Unit)
 			deviation := length(g.Drawn.Deviation, "e_max", d.Unit)
 			o.Tolerance, o.Deviation = &tolerance, &deviation
+			o.ArcLimit = g.Drawn.ArcLimit(g.Extent)
 		}
 		doc.Outline[string(r.Layer)] = o
 	}

@@ -74,14 +74,24 @@ func TestDeviationIsTheLargestDistance(t *testing.T) {
 	for name, tooth := range variety(t) {
 		for _, tolerance := range []float64{1e-2, 1e-4} {
 			eachPiece(tooth, func(p profile.Piece, e ends) {
-				for _, kind := range []Kind{Arc, Line} {
+				for _, kind := range []Kind{Arc, Cubic, Line} {
 					chain, claimed := fitArcs(p.Curve, tolerance, e)
-					if kind == Line {
+					switch kind {
+					case Cubic:
+						chain, claimed = fitCubics(p.Curve, tolerance)
+					case Line:
 						chain, claimed = fitChords(p.Curve, tolerance)
 					}
 					found := searchDeviation(p.Curve, chain)
-					const agree = 0.01
-					if claimed > tolerance || found > claimed*(1+agree)+rounding || found < claimed*(1-agree)-rounding {
+					if kind == Line {
+						// Joints lie off the curve, farther from it than any point of it is from
+						// the chords there.
+						for _, s := range chain[:len(chain)-1] {
+							found = math.Max(found, distanceTo(p.Curve, s.End))
+						}
+					}
+					const agree, resolved = 0.01, 5e-9 // the search's own step along a cubic, mm
+					if claimed > tolerance || found > claimed*(1+agree)+resolved || found < claimed*(1-agree)-resolved {
 						t.Errorf("%s part %d kind %d: claims %g of %g, a finer search finds %g", name, p.Part, kind, claimed, tolerance, found)
 					}
 				}
@@ -94,6 +104,9 @@ func TestDeviationIsTheLargestDistance(t *testing.T) {
 func searchDeviation(c profile.Curve, chain []Segment) float64 {
 	from, to := c.Domain()
 	n := 100 * deviationSamples * len(chain)
+	if chain[0].Kind == Cubic {
+		n = 400 * len(chain) // each of its distances is a search of its own
+	}
 	worst := 0.0
 	for i := range n + 1 {
 		p := c.At(from + float64(i)/float64(n)*(to-from))
@@ -107,8 +120,42 @@ func searchDeviation(c profile.Curve, chain []Segment) float64 {
 	return worst
 }
 
-// distance is from p to the nearest point of the segment itself.
+// distanceTo is the distance from p to the nearest point of the curve, by search.
+func distanceTo(c profile.Curve, p r2.Vec) float64 {
+	from, to := c.Domain()
+	best, at := math.Inf(1), from
+	step := (to - from) / 500
+	for range 6 {
+		for i := -500; i <= 500; i++ {
+			u := at + float64(i)*step
+			if (u-from)*(u-to) > 0 {
+				continue
+			}
+			if d := r2.Norm(r2.Sub(p, c.At(u))); d < best {
+				best, at = d, u
+			}
+		}
+		step /= 100
+	}
+	return best
+}
+
+// distance is from p to the nearest point of the segment itself. The nearest place of a
+// cubic is found by sections of its parameter.
 func distance(s Segment, p r2.Vec) float64 {
+	if s.Kind == Cubic {
+		best, at := math.Inf(1), 0.5
+		for step := 0.02; step > 1e-9; step /= 10 {
+			near := at
+			for i := -25; i <= 25; i++ {
+				u := math.Min(1, math.Max(0, near+float64(i)*step))
+				if d := r2.Norm(r2.Sub(p, s.cubicAt(u))); d < best {
+					best, at = d, u
+				}
+			}
+		}
+		return best
+	}
 	ends := math.Min(r2.Norm(r2.Sub(p, s.Start)), r2.Norm(r2.Sub(p, s.End)))
 	if s.Kind == Arc && s.Bulge != 0 {
 		c := s.Center()

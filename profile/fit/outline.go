@@ -6,72 +6,82 @@ import (
 	"gonum.org/v1/gonum/spatial/r2"
 )
 
-// Outline is the whole closed outline, counter-clockwise about the origin, turned
-// by turn in rad. It starts in the middle of the land of tooth 1, the place
+// Outline is the outline of that extent, counter-clockwise about the origin, turned by
+// turn in rad. A whole outline starts in the middle of the land of tooth 1, the place
 // where a closing segment harms least.
-func (f *Tooth) Outline(turn float64) Path {
-	pitch := f.pitchSegments()
-	first, rest := f.splitLand()
-	segments := make([]Segment, 0, f.teeth*len(pitch)+1)
-	add := func(angle float64, list []Segment) {
-		rotate := r2.NewRotation(angle, r2.Vec{}).Rotate
+func (f *Tooth) Outline(e Extent, turn float64) Path {
+	right := f.rightSide()
+	landBefore, landAfter := halves(f.Land)
+	rootBefore, rootAfter := halves(f.Root)
+	c := chain{turn: turn, pitch: f.pitch}
+	c.segments = make([]Segment, 0, f.teeth*(len(f.Land)+2*len(f.Side)+len(f.Root))+1)
+	switch e.Kind {
+	case ExtentSpace:
+		c.add(0, landAfter, f.Side, f.Root, right)
+		c.add(1, landBefore)
+	case ExtentTeeth:
+		c.add(-1, rootAfter, right)
+		for i := range e.Teeth - 1 {
+			c.add(i, f.Land, f.Side, f.Root, right)
+		}
+		c.add(e.Teeth-1, f.Land, f.Side, rootBefore)
+	default:
+		c.add(0, landAfter, f.Side, f.Root, right)
+		for i := 1; i < f.teeth; i++ {
+			c.add(i, f.Land, f.Side, f.Root, right)
+		}
+		c.add(f.teeth, landBefore)
+		c.segments[len(c.segments)-1].End = c.segments[0].Start
+	}
+	return Path{Segments: c.segments, Closed: !e.Partial()}
+}
+
+// chain gathers segments, each starting in the very point where the one before ends.
+type chain struct {
+	turn, pitch float64
+	segments    []Segment
+}
+
+// add appends lists turned by so many pitches.
+func (c *chain) add(pitches int, lists ...[]Segment) {
+	rotate := r2.NewRotation(c.turn+float64(pitches)*c.pitch, r2.Vec{}).Rotate
+	for _, list := range lists {
 		for _, s := range list {
 			m := s.Mapped(rotate, false)
-			if n := len(segments); n > 0 {
-				m.Start = segments[n-1].End
+			if n := len(c.segments); n > 0 {
+				m.Start = c.segments[n-1].End
 			}
-			segments = append(segments, m)
+			c.segments = append(c.segments, m)
 		}
 	}
-	land := len(f.Land)
-	add(turn, rest)
-	add(turn, pitch[land:])
-	for i := 1; i < f.teeth; i++ {
-		add(turn+f.pitch*float64(i), pitch)
-	}
-	add(turn, first)
-	if n := len(segments); n > 0 {
-		segments[n-1].End = segments[0].Start
-	}
-	return Path{Segments: segments, Closed: true}
 }
 
-// pitchSegments are the segments of one pitch, from the right end of a land to
-// that of the next: land, left side, root, and the next tooth's right side.
-func (f *Tooth) pitchSegments() []Segment {
-	segments := make([]Segment, 0, len(f.Land)+2*len(f.Side)+len(f.Root))
-	segments = append(segments, f.Land...)
-	segments = append(segments, f.Side...)
-	segments = append(segments, f.Root...)
+// rightSide is the right side of the next tooth, from its root to its land: the mirror
+// image of Side, reversed.
+func (f *Tooth) rightSide() []Segment {
 	rotate := r2.NewRotation(f.pitch, r2.Vec{}).Rotate
+	right := make([]Segment, 0, len(f.Side))
 	for i := len(f.Side) - 1; i >= 0; i-- {
-		right := f.Side[i].Mapped(mirrored, true).Reversed()
-		segments = append(segments, right.Mapped(rotate, false))
+		right = append(right, f.Side[i].Mapped(mirrored, true).Reversed().Mapped(rotate, false))
 	}
-	return segments
+	return right
 }
 
-// splitLand parts the land in its middle: the part before, which closes the
-// outline, and the part after, which opens it. A land of an odd number of
-// segments has its middle one halved.
-func (f *Tooth) splitLand() (before, after []Segment) {
-	n := len(f.Land)
-	if n == 0 {
-		return nil, nil
+// halves parts a symmetric land or root in its middle. Of an odd number of segments
+// the middle one is halved, on its chord's middle moved out by the sagitta b c/2.
+func halves(list []Segment) (before, after []Segment) {
+	half := len(list) / 2
+	if len(list)%2 == 0 {
+		return list[:half], list[half:]
 	}
-	half := n / 2
-	if n%2 == 0 {
-		return f.Land[:half], f.Land[half:]
-	}
-	s := f.Land[half]
-	// The middle of a segment symmetric about +Y lies on it: on the chord's
-	// middle, raised by the sagitta b c/2 to the outside.
-	middle := r2.Vec{Y: (s.Start.Y+s.End.Y)/2 + s.Bulge*s.Chord()/2}
-	bulge := math.Tan(math.Atan(s.Bulge) / 2)
-	left, right := s, s
-	left.End, left.Bulge = middle, bulge
-	right.Start, right.Bulge = middle, bulge
-	before = append(append(before, f.Land[:half]...), left)
-	after = append(append(after, right), f.Land[half+1:]...)
+	s := list[half]
+	d := r2.Sub(s.End, s.Start)
+	middle := r2.Add(r2.Scale(0.5, r2.Add(s.Start, s.End)), r2.Scale(s.Bulge/2, r2.Vec{X: d.Y, Y: -d.X}))
+	first, second := s, s
+	first.End, second.Start = middle, middle
+	first.Bulge = math.Tan(math.Atan(s.Bulge) / 2)
+	second.Bulge = first.Bulge
+	before = append(append(before, list[:half]...), first)
+	after = append(append(after, second), list[half+1:]...)
 	return before, after
 }

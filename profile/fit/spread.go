@@ -17,10 +17,14 @@ type spread struct {
 	weights, sums []float64
 }
 
-// spreadSteps is the number of parameter steps a spread is tabled over. Weights are
-// smooth: the totals come out to a few parts in ten thousand, and break points
-// need no more, since deviation is measured and not inferred.
-const spreadSteps = 32
+// The numbers of parameter steps a spread is tabled over. Weights are smooth: 32 give
+// totals to a few parts in ten thousand, and break points of arcs need no more, since
+// deviation is measured and not inferred. Chords can be many more than arcs, and one
+// of them a little too long costs them all.
+const (
+	arcSteps   = 32
+	chordSteps = 256
+)
 
 // arcSpread accumulates |k'|^(1/3) ds with k' the rate of the curvature by arc
 // length. The best tangent-continuous arcs take equal shares of it (an arc of
@@ -35,7 +39,7 @@ func arcSpread(c profile.Curve) spread {
 	if inv, ok := c.(profile.Involute); ok {
 		return spread{from: from, to: to, total: math.Cbrt(inv.BaseRadius) * math.Abs(to-from)}
 	}
-	return newSpread(c, func(u float64) float64 {
+	return newSpread(c, arcSteps, func(u float64) float64 {
 		return math.Cbrt(math.Abs(c.CurvatureRate(u))) * c.Speed(u)
 	})
 }
@@ -43,7 +47,7 @@ func arcSpread(c profile.Curve) spread {
 // chordSpread accumulates |k|^(1/2) ds: a chord of length L misses a curve by
 // k L^2/8.
 func chordSpread(c profile.Curve) spread {
-	return newSpread(c, func(u float64) float64 {
+	return newSpread(c, chordSteps, func(u float64) float64 {
 		return math.Sqrt(math.Abs(c.Curvature(u))) * c.Speed(u)
 	})
 }
@@ -51,25 +55,25 @@ func chordSpread(c profile.Curve) spread {
 // newSpread tables a weight given per unit of the parameter. The weight is taken
 // as linear between midpoints of steps, so that it is continuous and dealt break
 // points follow it smoothly.
-func newSpread(c profile.Curve, weight func(u float64) float64) spread {
+func newSpread(c profile.Curve, steps int, weight func(u float64) float64) spread {
 	from, to := c.Domain()
-	s := spread{from: from, to: to, weights: make([]float64, spreadSteps+1), sums: make([]float64, spreadSteps+1)}
-	step := (to - from) / spreadSteps
+	s := spread{from: from, to: to, weights: make([]float64, steps+1), sums: make([]float64, steps+1)}
+	step := (to - from) / float64(steps)
 	mid := func(i int) float64 { return weight(from+(float64(i)+0.5)*step) * math.Abs(step) }
 	before := mid(0)
 	s.weights[0] = before // a midpoint is never at an end, where a weight may be infinite
-	for i := 1; i <= spreadSteps; i++ {
+	for i := 1; i <= steps; i++ {
 		here := before
-		if i < spreadSteps {
+		if i < steps {
 			here = mid(i)
 		}
 		s.weights[i] = (before + here) / 2
 		before = here
 	}
-	for i := range spreadSteps {
+	for i := range steps {
 		s.sums[i+1] = s.sums[i] + (s.weights[i]+s.weights[i+1])/2
 	}
-	s.total = s.sums[spreadSteps]
+	s.total = s.sums[steps]
 	return s
 }
 
@@ -104,5 +108,5 @@ func (s spread) at(q float64) float64 {
 	// form that does not cancel.
 	w0, w1, rest := s.weights[i], s.weights[i+1], want-s.sums[i]
 	part := 2 * rest / (w0 + math.Sqrt(math.Max(0, w0*w0+2*(w1-w0)*rest)))
-	return s.from + (float64(i)+math.Min(part, 1))*(s.to-s.from)/spreadSteps
+	return s.from + (float64(i)+math.Min(part, 1))*(s.to-s.from)/float64(len(s.sums)-1)
 }

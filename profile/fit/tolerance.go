@@ -39,11 +39,14 @@ func checkTolerance(t *profile.Tooth, tolerance float64) error {
 // curves need. Chords grow in number with the square root of the tolerance, arcs with
 // its cube root, which gives the tolerance that would do.
 func checkCount(t *profile.Tooth, o Options) error {
+	if o.Curves == Cubic {
+		return nil // a few a tooth at any tolerance
+	}
 	need, power := 0.0, 3.0
 	count := func(c profile.Curve) float64 { return math.Ceil(arcLimit(arcSpread(c), o.Tolerance, ends{})) }
 	if o.Curves == Line {
 		power = 2
-		count = func(c profile.Curve) float64 { return math.Ceil(chordSpread(c).total / math.Sqrt(8*o.Tolerance)) }
+		count = func(c profile.Curve) float64 { return float64(chordCount(chordSpread(c), o.Tolerance)) }
 	}
 	need = count(t.Land)
 	for _, p := range t.Side {

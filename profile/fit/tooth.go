@@ -10,7 +10,7 @@ import (
 
 // Options say how curves are drawn.
 type Options struct {
-	Curves    Kind    // Arc or Line
+	Curves    Kind    // Arc, Cubic or Line
 	Tolerance float64 // mm, the largest deviation allowed
 }
 
@@ -28,6 +28,8 @@ type Tooth struct {
 	Deviation        float64 // mm, largest distance found between drawn and exact curve
 	pitch            float64 // rad, from one tooth to the next
 	teeth            int
+	// The least numbers of arcs that could draw land, side and root.
+	landLimit, sideLimit, rootLimit int
 }
 
 // NewTooth draws a solved tooth. The error is of type profile.Violations where the
@@ -40,34 +42,57 @@ func NewTooth(t *profile.Tooth, o Options) (*Tooth, error) {
 		return nil, err
 	}
 	f := &Tooth{Tolerance: o.Tolerance, pitch: t.Pitch(), teeth: t.Spec.Teeth}
-	f.Land = f.draw(t.Land, o, ends{})
+	f.Land, f.landLimit = f.draw(t.Land, o, ends{})
 	smooth := t.LandSmooth
 	for _, p := range t.Side {
-		f.Side = append(f.Side, f.draw(p.Curve, o, ends{start: smooth, end: p.SmoothEnd})...)
+		segments, limit := f.draw(p.Curve, o, ends{start: smooth, end: p.SmoothEnd})
+		f.Side = append(f.Side, segments...)
+		f.sideLimit += limit
 		smooth = p.SmoothEnd
 	}
 	if t.Root != nil {
-		f.Root = f.draw(*t.Root, o, ends{})
+		f.Root, f.rootLimit = f.draw(*t.Root, o, ends{})
 	}
 	f.absorbShort(t)
 	f.link()
 	return f, nil
 }
 
-// draw fits one exact curve and keeps the largest deviation. A curve too short to be
-// drawn is left out; its neighbours are linked over it.
-func (f *Tooth) draw(c profile.Curve, o Options, e ends) []Segment {
+// draw fits one exact curve and keeps the largest deviation; limit is the least number
+// of arcs that could draw it. A curve too short to be drawn is left out; its neighbours
+// are linked over it.
+func (f *Tooth) draw(c profile.Curve, o Options, e ends) (segments []Segment, limit int) {
 	if span := r2.Norm(r2.Sub(profile.End(c), profile.Start(c))); span < ShortestSegment {
 		f.Deviation = math.Max(f.Deviation, span)
-		return nil
+		return nil, 0
 	}
-	fit := func() ([]Segment, float64) { return fitArcs(c, o.Tolerance, e) }
-	if o.Curves == Line {
-		fit = func() ([]Segment, float64) { return fitChords(c, o.Tolerance) }
+	var worst float64
+	switch o.Curves {
+	case Line:
+		segments, worst = fitChords(c, o.Tolerance)
+	case Cubic:
+		segments, worst = fitCubics(c, o.Tolerance)
+	default:
+		segments, worst = fitArcs(c, o.Tolerance, e)
 	}
-	segments, worst := fit()
 	f.Deviation = math.Max(f.Deviation, worst)
-	return segments
+	limit = max(1, int(math.Ceil(arcLimit(arcSpread(c), o.Tolerance, e))))
+	if o.Curves == Arc {
+		limit = min(limit, len(segments)) // the formula takes curvature to change evenly along each arc
+	}
+	return segments, limit
+}
+
+// ArcLimit is the least number of tangent-continuous arcs that could draw the extent
+// within the tolerance.
+func (f *Tooth) ArcLimit(e Extent) int {
+	switch e.Kind {
+	case ExtentSpace:
+		return 2*f.landLimit + 2*f.sideLimit + f.rootLimit
+	case ExtentTeeth:
+		return e.Teeth*(f.landLimit+2*f.sideLimit) + (e.Teeth+1)*f.rootLimit
+	}
+	return f.teeth * (f.landLimit + 2*f.sideLimit + f.rootLimit)
 }
 
 // absorbShort removes segments shorter than ShortestSegment; a neighbour takes
