@@ -57,6 +57,9 @@ func zeros(n int) string {
 func TestBoundsStayBounds(t *testing.T) {
 	rapid.Check(t, func(t *rapid.T) {
 		v := rapid.OneOf(rapid.Float64Range(-1e4, 1e4), rapid.Float64Range(-1e-3, 1e-3), rapid.Float64Range(-1e-7, 1e-7)).Draw(t, "value")
+		if v != 0 && math.Abs(v) < 1e-11 {
+			t.Skip("below anything a bound is printed for")
+		}
 		decimals := rapid.IntRange(1, 9).Draw(t, "decimals")
 		slack := 2e-6 * math.Pow10(-decimals) // twice printNoise
 		printed := func(q profile.Quantity) float64 {

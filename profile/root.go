@@ -83,7 +83,7 @@ func (g generation) checkRoot(s Spec, r root, tip float64) Violations {
 			Text: "undercut cuts the tooth off at its root at a profile shift of {value}: its two fillets cross",
 			Hint: "a profile shift of {bound} or more avoids undercut; a smaller --dedendum or more teeth lessen it"}}
 	}
-	if r.formRadius < tip {
+	if tip-r.formRadius > leastEdge*g.m {
 		return nil
 	}
 	if r.undercut {

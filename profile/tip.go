@@ -15,6 +15,11 @@ type tip struct {
 	part      Part
 }
 
+// leastEdge is the shortest tip land and flank in modules that is left standing,
+// and the smallest rounding or chamfer that is made: a millionth of a micrometre for
+// each millimetre of module. At 2000 teeth a double resolves 1e-12 modules along the tip circle.
+const leastEdge = 1e-9
+
 // tipRadius is the tip circle as asked,
 //
 //	r_a = r + m (h_aP + x - k)
@@ -36,11 +41,11 @@ func (g generation) tipRadius(s Spec) (radius float64, warnings []Finding, found
 			Text: "the tip diameter {value} lies at or below the base circle {0}, so there is no involute flank",
 			Hint: "the tip must lie above {bound}, where the flank would end: raise --profile-shift, --addendum or --tip-diameter, or lower --pressure-angle"}}
 	}
-	least := s.MinTipThickness
-	if 2*radius*g.halfAngle(radius) > least || (least > 0 && 2*radius*g.halfAngle(radius) == least) {
+	least := math.Max(s.MinTipThickness, leastEdge*g.m)
+	if 2*radius*g.halfAngle(radius) >= least {
 		return radius, nil, nil
 	}
-	if least == 0 || given {
+	if s.MinTipThickness == 0 || given {
 		return radius, nil, g.refuseTip(s, radius)
 	}
 	lowered, ok := g.radiusOfThickness(least, radius)
@@ -72,13 +77,14 @@ func (g generation) radiusOfThickness(thick, limit float64) (float64, bool) {
 // refuseTip says why a tip at that radius cannot be left as it is.
 func (g generation) refuseTip(s Spec, radius float64) Violations {
 	atTip := g.halfAngle(radius)
-	if largest := s.Thinning + 2*g.r*atTip; atTip <= 0 && s.Thinning > 0 && largest > 0 {
+	none := leastEdge * g.m / (2 * radius) // half angle of a tip that counts as none
+	if largest := s.Thinning + 2*g.r*(atTip-none); atTip < none && s.Thinning > 0 && largest > 0 {
 		return Violations{{Rule: RuleThinningEatsTooth, Param: ParamThinning, Value: LengthOf(s.Thinning), Bound: LengthOf(largest).AtMost(),
 			Text: "thinning by {value} leaves no tooth at the tip diameter",
 			Hint: "thin by less than {bound}, or lower the tip with --tip-diameter"}}
 	}
 	pointed := g.pointedRadius()
-	if atTip > 0 {
+	if atTip >= none {
 		return Violations{{Rule: RuleTipThickness, Param: ParamMinTipThickness,
 			Value: LengthOf(s.MinTipThickness), Bound: LengthOf(2 * radius * atTip).AtMost(),
 			Also: []Quantity{LengthOf(2 * radius)},
@@ -100,9 +106,9 @@ func (g generation) refuseTip(s Spec, radius float64) Violations {
 func (g generation) solveTip(s Spec, radius, flankEnd float64) (tip, Violations) {
 	t := tip{radius: radius, landHalf: g.halfAngle(radius), flankRoll: rollAt(radius, g.rb)}
 	switch {
-	case s.TipRadius > 0:
+	case s.TipRadius > leastEdge*g.m:
 		return g.roundTip(t, s.TipRadius, flankEnd)
-	case s.TipChamfer > 0:
+	case s.TipChamfer > leastEdge*g.m:
 		return g.chamferTip(t, s.TipChamfer, flankEnd)
 	}
 	return t, nil
@@ -125,7 +131,7 @@ func (g generation) roundTip(t tip, q, flankEnd float64) (tip, Violations) {
 			return math.Inf(-1)
 		}
 		roll, land := g.tipRounding(t.radius, q)
-		return math.Min(land*t.radius, (roll+q/g.rb-flankEnd)*g.rb)
+		return math.Min(land*t.radius, (roll+q/g.rb-flankEnd)*g.rb) - leastEdge*g.m
 	}
 	if !(room(q) > 0) {
 		largest := largestBelow(room, q)
@@ -148,10 +154,10 @@ func (g generation) chamferTip(t tip, c, flankEnd float64) (tip, Violations) {
 	room := func(c float64) float64 {
 		land := t.landHalf*t.radius - c
 		flank := g.rb*(t.flankRoll*t.flankRoll-flankEnd*flankEnd)/2 - c
-		return math.Min(land, flank)
+		return math.Min(land, flank) - leastEdge*g.m
 	}
 	if !(room(c) > 0) {
-		return t, Violations{{Rule: RuleTipChamferTooLarge, Param: ParamTipChamfer, Value: LengthOf(c), Bound: LengthOf(room(0)).AtMost(),
+		return t, Violations{{Rule: RuleTipChamferTooLarge, Param: ParamTipChamfer, Value: LengthOf(c), Bound: LengthOf(math.Max(room(0), 0)).AtMost(),
 			Text: "a tip chamfer of {value} leaves no tip land or no flank",
 			Hint: "keep --tip-chamfer below {bound}"}}
 	}

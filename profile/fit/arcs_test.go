@@ -67,6 +67,40 @@ func TestArcsAreFew(t *testing.T) {
 	}
 }
 
+// TestArcsWasteNoTolerance: a chain of several arcs uses its tolerance, as far as one
+// arc less would not do: with n arcs counted without what prescribed tangents cost, the
+// deviation is at least 0.9 ((n-1)/n)^3 of it somewhere. Where two tangents are
+// prescribed, two arcs are the least there is, however little they deviate.
+func TestArcsWasteNoTolerance(t *testing.T) {
+	judged := 0
+	benchmarkSet(func(tooth *profile.Tooth) {
+		for _, tolerance := range []float64{1e-2, 1e-3, 1e-4, 1e-5} {
+			eachPiece(tooth, func(p profile.Piece, e ends) {
+				chain, worst := fitArcs(p.Curve, tolerance, e)
+				n := float64(len(chain))
+				if e.start {
+					n -= 1 - fixedShare
+				}
+				if e.end {
+					n -= 1 - fixedShare
+				}
+				if len(chain) < 2 || len(chain) == 2 && e.start && e.end {
+					return
+				}
+				judged++
+				if least := 0.9 * math.Pow((n-1)/n, 3) * tolerance; worst < least {
+					t.Errorf("z %d m %g x %g tolerance %g part %d: %d arcs deviate by %g only, at least %g expected",
+						tooth.Spec.Teeth, tooth.Spec.Module, tooth.Spec.ProfileShift, tolerance, p.Part, len(chain), worst, least)
+				}
+			})
+		}
+	})
+	const atLeast = 300 // chains of the set
+	if judged < atLeast {
+		t.Errorf("only %d chains judged", judged)
+	}
+}
+
 // TestDeviationIsTheLargestDistance measures every chain again at 100 times as many
 // places, as the distance from the exact point to the nearest point of any segment of
 // the chain, and compares to 1 %.

@@ -10,9 +10,13 @@ import (
 // its depth.
 const TolerancePerDepth = 0.1
 
-// LeastTolerance is the smallest tolerance in mm that nine decimals carry: a
-// rounded point moves by up to 0.7e-9.
-const LeastTolerance = 1e-8
+// pointRounding is how far in mm a point moves when a file rounds it to nine decimals
+// of an inch, sqrt 2 times half a step. Curves are fitted to what it leaves of the
+// tolerance, so that the file keeps it.
+const pointRounding = math.Sqrt2 / 2 * 25.4e-9
+
+// LeastTolerance is the smallest tolerance in mm that nine decimals carry.
+const LeastTolerance = 5e-8
 
 // MostSegments is how many segments an outline may have. Readers give up long before;
 // it keeps a careless tolerance from filling the memory.

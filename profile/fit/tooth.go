@@ -25,7 +25,7 @@ const ShortestSegment = 2e-6
 type Tooth struct {
 	Land, Side, Root []Segment
 	Tolerance        float64 // mm, as asked
-	Deviation        float64 // mm, largest distance found between drawn and exact curve
+	Deviation        float64 // mm, largest distance found between drawn and exact curve, before rounding
 	pitch            float64 // rad, from one tooth to the next
 	teeth            int
 	// The least numbers of arcs that could draw land, side and root.
@@ -42,6 +42,7 @@ func NewTooth(t *profile.Tooth, o Options) (*Tooth, error) {
 		return nil, err
 	}
 	f := &Tooth{Tolerance: o.Tolerance, pitch: t.Pitch(), teeth: t.Spec.Teeth}
+	o.Tolerance -= pointRounding
 	f.Land, f.landLimit = f.draw(t.Land, o, ends{})
 	smooth := t.LandSmooth
 	for _, p := range t.Side {
