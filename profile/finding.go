@@ -25,6 +25,7 @@ const (
 	ParamMinTipThickness Param = "min-tip-thickness"
 	ParamBore            Param = "bore"
 	ParamTolerance       Param = "tolerance"
+	ParamKerf            Param = "kerf"
 )
 
 // Rule identifies what a finding is about.
@@ -53,6 +54,7 @@ const (
 	RuleThinningEatsTooth  Rule = "thinning-eats-tooth"
 	RuleBoreIntoRoots      Rule = "bore-into-roots"
 	RuleTooManySegments    Rule = "too-many-segments"
+	RuleKerfTooWide        Rule = "kerf-too-wide"
 )
 
 // Rules of warnings.
@@ -61,6 +63,7 @@ const (
 	RuleRoundingLowered Rule = "rounding-lowered"
 	RuleTipLowered      Rule = "tip-lowered"
 	RuleThinRim         Rule = "thin-rim"
+	RuleKerfLeaves      Rule = "kerf-leaves-material"
 )
 
 // Malformed says that the request itself is wrong, rather than the gear it

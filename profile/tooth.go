@@ -10,22 +10,12 @@ type Tooth struct {
 	Dimensions Dimensions
 	Warnings   []Finding
 
-	// Land is the whole tip land, from the right corner to the left one.
-	Land CircleArc
-	// LandSmooth says that Side starts in the direction Land ends in.
-	LandSmooth bool
-	// Side is the left side from the end of the land to the root: rounding or
-	// chamfer if any, flank, fillet if it has any length.
-	Side []Piece
-	// Root is the whole root arc from this tooth's fillet to the next one's, nil
-	// with a full-radius root.
-	Root *CircleArc
 	// Undercut says that flank and fillet meet in a corner.
 	Undercut bool
-}
 
-// Pitch is the angle from one tooth to the next, in rad.
-func (t *Tooth) Pitch() float64 { return 2 * math.Pi / float64(t.Spec.Teeth) }
+	// Outline is the part's edge.
+	Outline
+}
 
 // axisSlack is the smallest root radius in modules at which the tooth's thickness
 // over its fillets still has digits. Long before, such a root has no strength, and
@@ -71,7 +61,8 @@ func Solve(s Spec) (*Tooth, error) {
 	if refused != nil {
 		return nil, refused
 	}
-	t := &Tooth{Spec: s, Warnings: warnings, Undercut: r.undercut, LandSmooth: tp.part == PartTipRounding}
+	t := &Tooth{Spec: s, Warnings: warnings, Undercut: r.undercut}
+	t.Teeth, t.LandSmooth = s.Teeth, tp.part == PartTipRounding
 	t.assemble(g, tp, r)
 	t.Dimensions = g.dimensions(s, tp, r)
 	return t, nil

@@ -78,7 +78,7 @@ func makeGear(j gearJob) (*gearMade, error) {
 		return nil, fromFindings(err, show)
 	}
 	bodyWarnings, found := j.body.Check(tooth)
-	drawn, err := fit.NewTooth(tooth, j.fit)
+	drawn, err := fit.NewTooth(tooth.Outline, j.fit)
 	if err != nil {
 		violations, ok := err.(profile.Violations)
 		if !ok {

@@ -25,7 +25,7 @@ func gear(t *testing.T, unit export.Unit) []byte {
 	if err != nil {
 		t.Fatal(err)
 	}
-	drawn, err := fit.NewTooth(tooth, fit.Options{Curves: fit.Arc, Tolerance: 1e-3})
+	drawn, err := fit.NewTooth(tooth.Outline, fit.Options{Curves: fit.Arc, Tolerance: 1e-3})
 	if err != nil {
 		t.Fatal(err)
 	}

@@ -211,7 +211,7 @@ func distance(s Segment, p r2.Vec) float64 {
 func TestToleranceBounds(t *testing.T) {
 	tooth := solved(t, 2, 24, nil)
 	for _, tolerance := range []float64{0, -1, math.NaN(), LeastTolerance / 2, 0.451, math.Inf(1)} {
-		_, err := NewTooth(tooth, Options{Curves: Arc, Tolerance: tolerance})
+		_, err := NewTooth(tooth.Outline, Options{Curves: Arc, Tolerance: tolerance})
 		var f profile.Finding
 		if !errors.As(err, &f) || f.Rule != profile.RuleOutOfRange || f.Param != profile.ParamTolerance {
 			t.Errorf("tolerance %g: %v", tolerance, err)

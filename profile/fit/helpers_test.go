@@ -24,7 +24,7 @@ func solved(t testing.TB, module float64, teeth int, change func(*profile.Spec))
 // drawn is a tooth drawn in the kind of curve.
 func drawn(t testing.TB, tooth *profile.Tooth, kind Kind, tolerance float64) *Tooth {
 	t.Helper()
-	f, err := NewTooth(tooth, Options{Curves: kind, Tolerance: tolerance})
+	f, err := NewTooth(tooth.Outline, Options{Curves: kind, Tolerance: tolerance})
 	if err != nil {
 		t.Fatal(err)
 	}

@@ -22,7 +22,7 @@ const LeastTolerance = 5e-8
 // it keeps a careless tolerance from filling the memory.
 const MostSegments = 250_000
 
-func checkTolerance(t *profile.Tooth, tolerance float64) error {
+func checkTolerance(t profile.Outline, tolerance float64) error {
 	value := profile.LengthOf(tolerance)
 	if !(tolerance >= LeastTolerance) {
 		return profile.Violations{{Rule: profile.RuleOutOfRange, Param: profile.ParamTolerance,
@@ -30,7 +30,7 @@ func checkTolerance(t *profile.Tooth, tolerance float64) error {
 			Text: "the tolerance {value} is below what nine decimals carry",
 			Hint: "it must be at least {bound}"}}
 	}
-	if largest := TolerancePerDepth * t.Dimensions.WholeDepth; tolerance > largest {
+	if largest := TolerancePerDepth * t.Depth(); tolerance > largest {
 		return profile.Violations{{Rule: profile.RuleOutOfRange, Param: profile.ParamTolerance,
 			Value: value, Bound: profile.LengthOf(largest).AtMost(),
 			Text: "the tolerance {value} is larger than a tenth of the tooth's depth",
@@ -42,7 +42,7 @@ func checkTolerance(t *profile.Tooth, tolerance float64) error {
 // checkCount refuses outlines of more than MostSegments, from the least number the
 // curves need. Chords grow in number with the square root of the tolerance, arcs with
 // its cube root, which gives the tolerance that would do.
-func checkCount(t *profile.Tooth, o Options) error {
+func checkCount(t profile.Outline, o Options) error {
 	if o.Curves == Cubic {
 		return nil // a few a tooth at any tolerance
 	}
@@ -59,7 +59,7 @@ func checkCount(t *profile.Tooth, o Options) error {
 	if t.Root != nil {
 		need += count(*t.Root)
 	}
-	need *= float64(t.Spec.Teeth)
+	need *= float64(t.Teeth)
 	if need <= MostSegments {
 		return nil
 	}

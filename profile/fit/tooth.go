@@ -34,14 +34,14 @@ type Tooth struct {
 
 // NewTooth draws a solved tooth. The error is of type profile.Violations where the
 // tolerance cannot be met or is larger than the tooth.
-func NewTooth(t *profile.Tooth, o Options) (*Tooth, error) {
+func NewTooth(t profile.Outline, o Options) (*Tooth, error) {
 	if err := checkTolerance(t, o.Tolerance); err != nil {
 		return nil, err
 	}
 	if err := checkCount(t, o); err != nil {
 		return nil, err
 	}
-	f := &Tooth{Tolerance: o.Tolerance, pitch: t.Pitch(), teeth: t.Spec.Teeth}
+	f := &Tooth{Tolerance: o.Tolerance, pitch: t.Pitch(), teeth: t.Teeth}
 	o.Tolerance -= pointRounding
 	f.Land, f.landLimit = f.draw(t.Land, o, ends{})
 	smooth := t.LandSmooth
@@ -98,7 +98,7 @@ func (f *Tooth) ArcLimit(e Extent) int {
 
 // absorbShort removes segments shorter than ShortestSegment; a neighbour takes
 // over their end. How far a point moved counts as deviation.
-func (f *Tooth) absorbShort(t *profile.Tooth) {
+func (f *Tooth) absorbShort(t profile.Outline) {
 	kept := f.Side[:0]
 	for _, s := range f.Side {
 		short := s.Length() < ShortestSegment
