@@ -27,6 +27,9 @@ func FuzzSolve(f *testing.F) {
 	}
 	add(with(gear("iso53-a", 1, 40, 0.1), func(s *profile.Spec) { s.Thinning = math.NaN() }))
 	add(profile.Spec{})
+	// Found by fuzzing: a chamfer that left a land of 1e-15 modules.
+	add(profile.Spec{Module: 100, Teeth: 2000, Rack: profile.BasicRack{PressureAngle: 20 * degree, Addendum: 640.0 / 3, Dedendum: 100, RootRadius: 105},
+		ProfileShift: -0.2, Thinning: 318, ThinningBy: profile.ThinByInfeed, TipShortening: 132, TipChamfer: 22, MinTipThickness: 44})
 	f.Fuzz(func(t *testing.T, module float64, teeth int, angle, addendum, dedendum, radius float64, rounding uint8,
 		shift, thinning float64, infeed bool, tip, shortening, tipRadius, chamfer, thickness float64) {
 		s := profile.Spec{Module: module, Teeth: teeth,

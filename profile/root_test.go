@@ -8,20 +8,6 @@ import (
 	"flankwright/profile"
 )
 
-// TestFilletPoints checks points of the fillet of 20 teeth, ISO 53 A, against
-// values computed by us and confirmed by sweeping a rack (calc-P).
-func TestFilletPoints(t *testing.T) {
-	rows := references(t)
-	fillet := filletOf(t, solve(t, gear("iso53-a", 1, 20, 0)))
-	for _, p := range []int{22, 30, 45, 60, 75, 88, 90} {
-		row := rows[fmt.Sprintf("calc-P-z20-x0-%d", p)]
-		at := fillet.At(float64(p) * degree)
-		row.checkRecomputed(t, "half_width", -at.X)
-		row.checkRecomputed(t, "y", at.Y)
-		row.checkRecomputed(t, "R", norm(at))
-	}
-}
-
 // TestUndercutJunction checks where fillet and flank cross, against values
 // computed by us (calc-C), in modules of any size.
 func TestUndercutJunction(t *testing.T) {
@@ -120,29 +106,4 @@ func TestRootCircleAndForm(t *testing.T) {
 		}
 	}
 	rows["F01"].checkRecomputed(t, "closed form z=20,ISO A", solve(t, gear("iso53-a", 1, 20, 0)).Dimensions.MinFilletRadius)
-}
-
-// TestMinFilletRadius checks that no point of any fillet is curved more sharply
-// than the least radius says.
-func TestMinFilletRadius(t *testing.T) {
-	for _, name := range []string{"iso53-a", "iso53-c", "stub-20"} {
-		for _, z := range []int{6, 8, 12, 20, 60, 400} {
-			for _, x := range []float64{-0.4, 0, 0.4, 0.8} {
-				s := gear(name, 2, z, x)
-				s.MinTipThickness = 0.1
-				tooth, err := profile.Solve(s)
-				if err != nil {
-					continue
-				}
-				fillet := filletOf(t, tooth)
-				least := math.Inf(1)
-				for _, p := range along(fillet, 200) {
-					if k := fillet.Curvature(p); k < 0 {
-						least = math.Min(least, -1/k)
-					}
-				}
-				near(t, fmt.Sprintf("%s z = %d, x = %v", name, z, x), tooth.Dimensions.MinFilletRadius, least, exact*math.Max(least, 1)*10)
-			}
-		}
-	}
 }

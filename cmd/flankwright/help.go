@@ -2,6 +2,7 @@ package main
 
 import (
 	"fmt"
+	"io"
 	"strings"
 
 	"github.com/spf13/cobra"
@@ -11,21 +12,39 @@ import (
 	"flankwright/export/sidecar"
 )
 
-const usageTemplate = `Usage:{{if .Runnable}}
-  {{.UseLine}}{{end}}{{if .HasAvailableSubCommands}}
-  {{.CommandPath}} COMMAND [flags]
-
-Commands:{{range .Commands}}{{if .IsAvailableCommand}}
-  {{rpad .Name .NamePadding}} {{.Short}}{{end}}{{end}}{{end}}{{if .HasHelpSubCommands}}
-
-Further help:{{range .Commands}}{{if .IsAdditionalHelpTopicCommand}}
-  {{rpad .Name .NamePadding}} {{.Short}}{{end}}{{end}}{{end}}{{if .HasAvailableLocalFlags}}
-
-{{groupedFlags .LocalFlags}}{{end}}{{if .HasExample}}
-
-Examples:
-{{.Example}}{{end}}
-`
+// usage prints the usage of a command. It is a function and not a template because
+// functions for templates are shared by all commands of a process.
+func usage(cmd *cobra.Command) error {
+	var b strings.Builder
+	b.WriteString("Usage:\n")
+	if cmd.Runnable() {
+		fmt.Fprintf(&b, "  %s\n", cmd.UseLine())
+	}
+	list := func(heading string, wanted func(*cobra.Command) bool) {
+		for _, c := range cmd.Commands() {
+			if wanted(c) {
+				if heading != "" {
+					fmt.Fprintf(&b, "\n%s:\n", heading)
+					heading = ""
+				}
+				fmt.Fprintf(&b, "  %-*s %s\n", cmd.NamePadding(), c.Name(), c.Short)
+			}
+		}
+	}
+	if cmd.HasAvailableSubCommands() {
+		fmt.Fprintf(&b, "  %s COMMAND [flags]\n", cmd.CommandPath())
+		list("Commands", (*cobra.Command).IsAvailableCommand)
+		list("Further help", (*cobra.Command).IsAdditionalHelpTopicCommand)
+	}
+	if cmd.HasAvailableLocalFlags() {
+		fmt.Fprintf(&b, "\n%s\n", groupedFlags(cmd.LocalFlags()))
+	}
+	if cmd.HasExample() {
+		fmt.Fprintf(&b, "\nExamples:\n%s\n", cmd.Example)
+	}
+	_, err := io.WriteString(cmd.OutOrStdout(), b.String())
+	return err
+}
 
 // reading explains placeholders and exit codes where flags are many.
 const reading = `L is a length: 12mm, 0.5in, 1um, 2thou, or bare in the unit of the size.

@@ -67,8 +67,7 @@ sidecar of dimensions. What cannot be made is refused, with what would work.`,
 	root.SetOut(io.out)
 	root.SetErr(io.err)
 	root.SetFlagErrorFunc(flagError)
-	root.SetUsageTemplate(usageTemplate)
-	cobra.AddTemplateFunc("groupedFlags", groupedFlags)
+	root.SetUsageFunc(usage)
 	root.AddCommand(newGear(io), newBasicRacks(io), newVersion(io), newSidecarTopic())
 	return root
 }
