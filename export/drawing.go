@@ -45,8 +45,11 @@ type Layer string
 // The layers of a part.
 const (
 	LayerOutline   Layer = "OUTLINE"   // the part's toothed edge
-	LayerBore      Layer = "BORE"      // the bore
-	LayerReference Layer = "REFERENCE" // reference, base, form circles; not to be cut
+	LayerBore      Layer = "BORE"      // the bore with its keyway, flat or hexagon
+	LayerHoles     Layer = "HOLES"     // hole circles and windows
+	LayerReference Layer = "REFERENCE" // circles, center lines, radial limits; not to be cut
+	LayerLead      Layer = "LEAD"      // ways from pierce points onto the cuts
+	LayerLabel     Layer = "LABEL"     // single-stroke characters
 )
 
 // Role says what an item does to the part.
@@ -93,9 +96,7 @@ func (d Drawing) Bounds() r2.Box {
 	inf := math.Inf(1)
 	box := r2.Box{Min: r2.Vec{X: inf, Y: inf}, Max: r2.Vec{X: -inf, Y: -inf}}
 	for _, it := range d.Items {
-		b := it.Bounds()
-		box.Min = r2.Vec{X: math.Min(box.Min.X, b.Min.X), Y: math.Min(box.Min.Y, b.Min.Y)}
-		box.Max = r2.Vec{X: math.Max(box.Max.X, b.Max.X), Y: math.Max(box.Max.Y, b.Max.Y)}
+		box = union(box, it.Bounds())
 	}
 	return box
 }

@@ -26,13 +26,13 @@ func layerColor(l export.Layer) color.ColorNumber {
 	switch export.Layer(name) {
 	case export.LayerBore:
 		return color.Blue
-	case "HOLES":
+	case export.LayerHoles:
 		return color.Cyan
 	case export.LayerReference:
 		return color.Green
-	case "LEAD":
+	case export.LayerLead:
 		return color.Red
-	case "LABEL":
+	case export.LayerLabel:
 		return color.Magenta
 	}
 	return color.White

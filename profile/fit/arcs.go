@@ -64,7 +64,7 @@ func fitArcs(c profile.Curve, tolerance float64, e ends) ([]Segment, float64) {
 
 // limitSlack is by how much a chain may undercut the formula for the least number
 // of arcs, which takes the curvature's rate as constant along each.
-const limitSlack = 1.08
+const limitSlack = 1.03
 
 // backward is a curve travelled from its end to its start.
 type backward struct{ profile.Curve }

@@ -32,12 +32,13 @@ const (
 // rb^(1/3) times the roll angle, so equal steps in roll angle are best.
 func arcSpread(c profile.Curve) spread {
 	from, to := c.Domain()
-	if b, ok := c.(backward); ok {
-		s := arcSpread(b.Curve)
-		return s.backward()
-	}
-	if inv, ok := c.(profile.Involute); ok {
-		return spread{from: from, to: to, total: math.Cbrt(inv.BaseRadius) * math.Abs(to-from)}
+	switch exact := c.(type) {
+	case backward:
+		return arcSpread(exact.Curve).backward()
+	case profile.Involute:
+		return spread{from: from, to: to, total: math.Cbrt(exact.BaseRadius) * math.Abs(to-from)}
+	case profile.CircleArc, profile.StraightLine:
+		return spread{from: from, to: to} // one arc draws them
 	}
 	return newSpread(c, arcSteps, func(u float64) float64 {
 		return math.Cbrt(math.Abs(c.CurvatureRate(u))) * c.Speed(u)
