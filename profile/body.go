@@ -1,5 +1,7 @@
 package profile
 
+import "math"
+
 // Body is what is inside the teeth. Lengths are mm.
 type Body struct {
 	Bore float64 // diameter of a plain round bore; 0 for none
@@ -32,4 +34,18 @@ func (b Body) Check(t *Tooth) (warnings []Finding, found Violations) {
 			Text: "the rim between roots and bore is only {value} thick; AGMA 2001-D04 reduces the load below {bound} (1.2 whole depths)"}}
 	}
 	return warnings, nil
+}
+
+// Area is what the bore takes off the part, in mm^2.
+func (b Body) Area() float64 { return math.Pi * b.Bore * b.Bore / 4 }
+
+// Beam is the diameter of the path of a beam of that width along the bore: the bore
+// less the width. A bore no wider than the beam is refused.
+func (b Body) Beam(width float64) (float64, error) {
+	if width >= b.Bore {
+		return 0, Violations{{Rule: RuleKerfTooWide, Param: ParamKerf, Value: LengthOf(width), Bound: LengthOf(b.Bore).AtMost(),
+			Text: "a beam {value} wide does not fit into the bore of {bound}",
+			Hint: "it must be narrower than {bound}"}}
+	}
+	return b.Bore - width, nil
 }

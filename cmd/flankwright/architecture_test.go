@@ -14,7 +14,9 @@ import (
 // may import packages above its own line only.
 var layers = []string{
 	"profile",
+	"profile/body",
 	"profile/fit",
+	"profile/label",
 	"export",
 	"export/fixed",
 	"export/sheet",

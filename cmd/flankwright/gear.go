@@ -7,10 +7,7 @@ import (
 	"github.com/spf13/cobra"
 
 	"flankwright/export"
-	"flankwright/export/dxf"
-	"flankwright/export/sidecar"
 	"flankwright/profile"
-	"flankwright/profile/fit"
 )
 
 func newGear(io streams) *cobra.Command {
@@ -58,46 +55,6 @@ func runGear(ctx context.Context, io streams, req request, params []parameter) e
 		return err
 	}
 	return out.deliver(ctx, io, made)
-}
-
-// gearMade is a gear ready to be written or reported.
-type gearMade struct {
-	gear     export.Gear
-	drawing  export.Drawing
-	dxf      dxf.Options
-	document *sidecar.Document
-	warnings []profile.Finding
-}
-
-// makeGear solves, fits and lays out. Everything the geometry refuses is reported
-// together, as far as it can be judged.
-func makeGear(j gearJob) (*gearMade, error) {
-	show := sidecar.Show(j.unit)
-	tooth, err := profile.Solve(j.spec)
-	if err != nil {
-		return nil, fromFindings(err, show)
-	}
-	bodyWarnings, found := j.body.Check(tooth)
-	drawn, err := fit.NewTooth(tooth.Outline, j.fit)
-	if err != nil {
-		violations, ok := err.(profile.Violations)
-		if !ok {
-			return nil, err
-		}
-		found = append(found, violations...)
-	}
-	if found != nil {
-		return nil, fromFindings(found, show)
-	}
-	m := &gearMade{
-		gear: export.Gear{Tooth: tooth, Drawn: drawn, Body: j.body, Unit: j.unit,
-			Extent: j.extent, Turn: j.turn, Reference: j.reference},
-		dxf:      j.dxf,
-		warnings: append(tooth.Warnings, bodyWarnings...),
-	}
-	m.drawing = m.gear.Drawing()
-	m.document = sidecar.Gear(j.input, j.rack, m.gear, m.drawing, m.warnings)
-	return m, nil
 }
 
 // title names the gear in one line.

@@ -152,7 +152,9 @@ func (o output) printFiles(io streams, m *gearMade, set []files.File) error {
 	for _, f := range set {
 		fmt.Fprintf(&b, "wrote %s, %d bytes\n", f.Name, len(f.Data))
 	}
-	fmt.Fprintln(&b, outlineLine(m))
+	for _, line := range m.reportLines() {
+		fmt.Fprintln(&b, line)
+	}
 	_, err := io.out.Write([]byte(b.String()))
 	return writeFailed("stdout", err)
 }

@@ -15,6 +15,7 @@ const (
 	groupForm    group = "Form"
 	groupBody    group = "Body"
 	groupDrawing group = "Drawing"
+	groupCut     group = "Cutting"
 	groupOutput  group = "Output"
 )
 
@@ -63,6 +64,12 @@ func gearParameters() []parameter {
 		{name: "dxf", group: groupDrawing, value: "VERSION", usage: "r2000 or r12 (default r2000)", choices: []string{"r2000", "r12"}},
 		{name: "loose", group: groupDrawing, usage: "writes DXF outlines as single lines and arcs, not as polylines"},
 		{name: "turn", group: groupDrawing, value: "DEG", usage: "turns the part counter-clockwise; tooth 1 is on +Y (default 0)"},
+
+		{name: "kerf", group: groupCut, value: "W", usage: "draws the path of a beam W wide: outer loops W/2 out, inner loops W/2 in"},
+		{name: "lead-in", group: groupCut, value: "L", usage: "adds quarter turns of radius L from pierce points on the scrap side onto each cut"},
+		{name: "tabs", group: groupCut, value: "NxW", usage: "leaves N gaps of width W on tip lands"},
+		{name: "label", group: groupCut, value: "TEXT", usage: "single-stroke characters on the web: letters, digits, . - + / and space"},
+		{name: "label-height", group: groupCut, value: "L", usage: "of its capitals (default the largest that fits)"},
 
 		{name: "output", short: "o", group: groupOutput, value: "PATH", usage: "a .dxf or .svg file, repeatable; the sidecar takes the first one's base name with .json", repeatable: true, transient: true},
 		{name: "json", group: groupOutput, usage: "prints the sidecar to stdout", transient: true},

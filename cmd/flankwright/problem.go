@@ -11,6 +11,7 @@ import (
 	"github.com/spf13/pflag"
 
 	"flankwright/profile"
+	"flankwright/profile/label"
 )
 
 // problem is one thing wrong with a run, as it is told on stderr.
@@ -100,11 +101,17 @@ func fromFindings(err error, show func(profile.Quantity) string) error {
 	found := make(problems, len(violations))
 	for i, f := range violations {
 		message, hint := f.Describe(show)
-		exit := exitGeometry
-		if f.Rule.Malformed() {
-			exit = exitMalformed
+		found[i] = problem{flag: string(f.Param), value: show(f.Value), message: message, hint: hint, exit: exitGeometry}
+		switch f.Rule {
+		case label.RuleCharacters, label.RuleTooLong, label.RuleBlank:
+			found[i].value, found[i].exit = "", exitMalformed
+		case label.RuleNoRoom:
+			found[i].value = ""
+		default:
+			if f.Rule.Malformed() {
+				found[i].exit = exitMalformed
+			}
 		}
-		found[i] = problem{flag: string(f.Param), value: show(f.Value), message: message, hint: hint, exit: exit}
 	}
 	return found
 }

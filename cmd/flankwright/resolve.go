@@ -27,7 +27,14 @@ type gearJob struct {
 	dxf       dxf.Options
 	turn      float64 // rad
 	reference bool
-	input     map[string]any
+	kerf      float64 // mm; 0 draws the part's own edge
+	leadIn    float64 // mm; 0 for none
+	tabs      int
+	tabWidth  float64 // mm
+	label     string
+	// labelHeight is in mm; 0 takes the largest that fits.
+	labelHeight float64
+	input       map[string]any
 }
 
 // resolveGear reads a request for a gear. All that is malformed is reported
@@ -40,6 +47,7 @@ func resolveGear(req request) (gearJob, error) {
 	r.rack(&j, inch)
 	r.form(&j)
 	r.drawing(&j, inch)
+	r.cut(&j)
 	j.input = r.input
 	if r.found != nil {
 		return gearJob{}, r.found
@@ -150,7 +158,7 @@ func (r *reader) rack(j *gearJob, inch bool) {
 	}
 }
 
-// form reads shift, thinning, tip and body.
+// form reads shift, thinning, tip and bore.
 func (r *reader) form(j *gearJob) {
 	s := &j.spec
 	s.ProfileShift, _ = r.number("profile-shift", "")

@@ -8,6 +8,7 @@ import (
 	"text/tabwriter"
 
 	"flankwright/export"
+	"flankwright/export/sidecar"
 	"flankwright/profile"
 )
 
@@ -35,8 +36,8 @@ func printTable(out io.Writer, m *gearMade) error {
 	rows = append(rows,
 		export.Row{Name: "profile shift coefficient", Symbol: "x", Value: profile.NumberOf(spec.ProfileShift)},
 		export.Row{Name: "thinning on d", Symbol: "E", Value: profile.LengthOf(spec.Thinning)})
-	if bore := m.gear.Body.Bore; bore > 0 {
-		rows = append(rows, export.Row{Name: "bore", Symbol: "d_B", Value: profile.LengthOf(bore)})
+	if m.bore > 0 {
+		rows = append(rows, export.Row{Name: "bore", Symbol: "d_B", Value: profile.LengthOf(m.bore)})
 	}
 	for _, r := range rows {
 		mm, inch := tableCells(r.Value)
@@ -45,7 +46,10 @@ func printTable(out io.Writer, m *gearMade) error {
 	if err := w.Flush(); err != nil {
 		return err
 	}
-	fmt.Fprintf(&b, "\n%s\n", outlineLine(m))
+	fmt.Fprintln(&b)
+	for _, line := range m.reportLines() {
+		fmt.Fprintln(&b, line)
+	}
 	for _, c := range export.Cautions() {
 		fmt.Fprintf(&b, "caution: %s\n", c)
 	}
@@ -84,6 +88,22 @@ func sizeNotes(module float64) []string {
 
 // micrometres prints a length of mm that is small.
 func micrometres(mm float64) string { return profile.NumberOf(mm*1000).String() + " um" }
+
+// reportLines tell what is drawn, how the beam's path differs from the part, and what
+// was chosen.
+func (m *gearMade) reportLines() []string {
+	lines := []string{outlineLine(m)}
+	show := sidecar.Show(m.gear.Unit)
+	if k := m.kerf; k != nil {
+		tip := m.gear.Tooth.Dimensions.TipDiameter
+		lines = append(lines, fmt.Sprintf("kerf %s: drawn is the path of the beam, tip diameter %s for the part's %s", show(profile.LengthOf(k.Width)),
+			show(profile.LengthOf(tip+k.Width)), show(profile.LengthOf(tip))))
+	}
+	for _, c := range m.choices {
+		lines = append(lines, fmt.Sprintf("chosen: --%s %s, %s", c.Flag, show(c.Value), c.Reason))
+	}
+	return lines
+}
 
 // outlineLine sums up what is drawn: entities, deviation, and the size to check
 // after import.

@@ -29,6 +29,8 @@ type Document struct {
 	BasicRack  map[string]any      `json:"basic_rack"`
 	Dimensions map[string]any      `json:"dimensions"`
 	Outline    map[string]*Outline `json:"outline"`
+	Kerf       *Kerf               `json:"kerf,omitempty"`
+	Choices    []Choice            `json:"choices"`
 	Files      []File              `json:"files"`
 	Warnings   []Warning           `json:"warnings"`
 	Cautions   []string            `json:"cautions"`
@@ -46,6 +48,30 @@ type Outline struct {
 	Tolerance      *Value         `json:"tolerance,omitempty"`
 	Deviation      *Value         `json:"deviation,omitempty"`
 	ArcLimit       int            `json:"arc_limit,omitempty"`
+}
+
+// Kerf says that the drawing shows the path of a beam and not the part's edge.
+type Kerf struct {
+	Width         Value      `json:"width"`
+	PartArea      Value      `json:"part_area"`      // the part's own, holes taken off
+	PartPerimeter Value      `json:"part_perimeter"` // of its outline
+	Leftover      []Leftover `json:"leftover"`
+}
+
+// Leftover is a place the beam cannot reach, and how thick the material stands there.
+// Of the teeth only the places of one space are listed.
+type Leftover struct {
+	Place string `json:"place"`
+	X     Value  `json:"x"`
+	Y     Value  `json:"y"`
+	Depth Value  `json:"depth"`
+}
+
+// Choice is a value nobody gave and the program chose.
+type Choice struct {
+	Flag   string `json:"flag"`
+	Value  any    `json:"value"`
+	Reason string `json:"reason"`
 }
 
 // Bounds is the box around a layer.

@@ -11,38 +11,91 @@ type Rack struct {
 	Source string
 }
 
+// KerfReport is what is known of the beam's path besides the drawing. Lengths are mm.
+type KerfReport struct {
+	Width, PartArea, PartPerimeter float64
+	Leftover                       []LeftoverAt
+}
+
+// Chosen is a value nobody gave, and why it was chosen.
+type Chosen struct {
+	Flag   string
+	Value  profile.Quantity
+	Reason string
+}
+
+// LeftoverAt is material left, with the name of its place.
+type LeftoverAt struct {
+	Place string
+	profile.Leftover
+}
+
+// Made is all that a document of a gear tells.
+type Made struct {
+	Input    map[string]any
+	Rack     Rack
+	Gear     export.Gear
+	Drawing  export.Drawing
+	Kerf     *KerfReport // nil without a kerf
+	Choices  []Chosen
+	Warnings []profile.Finding
+}
+
 // Gear builds the document of a gear; files are added when their bytes are known.
-func Gear(input map[string]any, rack Rack, g export.Gear, d export.Drawing, warnings []profile.Finding) *Document {
+func Gear(m Made) *Document {
+	unit := m.Gear.Unit
 	doc := &Document{
 		Schema:     SchemaID,
-		Input:      input,
-		Unit:       g.Unit.String(),
-		BasicRack:  map[string]any{"name": rack.Name, "source": rack.Source},
+		Input:      m.Input,
+		Unit:       unit.String(),
+		BasicRack:  map[string]any{"name": m.Rack.Name, "source": m.Rack.Source},
 		Dimensions: map[string]any{},
 		Outline:    map[string]*Outline{},
+		Choices:    []Choice{},
 		Files:      []File{},
 		Warnings:   []Warning{},
 		Cautions:   export.Cautions(),
 	}
-	for _, r := range export.RackRows(g.Tooth.Spec.Rack) {
-		doc.BasicRack[r.Key] = value(r.Value, r.Symbol, g.Unit)
+	for _, r := range export.RackRows(m.Gear.Tooth.Spec.Rack) {
+		doc.BasicRack[r.Key] = value(r.Value, r.Symbol, unit)
 	}
-	for _, r := range export.DimensionRows(g.Tooth.Dimensions) {
-		doc.Dimensions[r.Key] = value(r.Value, r.Symbol, g.Unit)
+	for _, r := range export.DimensionRows(m.Gear.Tooth.Dimensions) {
+		doc.Dimensions[r.Key] = value(r.Value, r.Symbol, unit)
 	}
-	for _, r := range d.Report() {
-		o := outline(r, d.Unit)
+	for _, r := range m.Drawing.Report() {
+		o := outline(r, unit)
 		if r.Layer == export.LayerOutline {
-			tolerance := length(g.Drawn.Tolerance, "e", d.Unit)
-			deviation := length(g.Drawn.Deviation, "e_max", d.Unit)
+			tolerance := length(m.Gear.Drawn.Tolerance, "e", unit)
+			deviation := length(m.Gear.Drawn.Deviation, "e_max", unit)
 			o.Tolerance, o.Deviation = &tolerance, &deviation
-			o.ArcLimit = g.Drawn.ArcLimit(g.Extent)
+			o.ArcLimit = m.Gear.Drawn.ArcLimit(m.Gear.Extent)
 		}
 		doc.Outline[string(r.Layer)] = o
 	}
-	for _, w := range warnings {
-		message, _ := w.Describe(Show(g.Unit))
+	if m.Kerf != nil {
+		doc.Kerf = kerf(*m.Kerf, unit)
+	}
+	for _, c := range m.Choices {
+		doc.Choices = append(doc.Choices, Choice{Flag: c.Flag, Value: value(c.Value, c.Flag, unit), Reason: c.Reason})
+	}
+	for _, w := range m.Warnings {
+		message, _ := w.Describe(Show(unit))
 		doc.Warnings = append(doc.Warnings, Warning{Code: string(w.Rule), Message: message})
+	}
+	return doc
+}
+
+// kerf gives the report of a beam's path in the unit of the drawing.
+func kerf(k KerfReport, unit export.Unit) *Kerf {
+	scale := unit.Scale()
+	doc := &Kerf{
+		Width:         length(k.Width, "W", unit),
+		PartArea:      Value{Decimal(k.PartArea * scale * scale), unit.String() + "^2", "A"},
+		PartPerimeter: length(k.PartPerimeter, "L", unit),
+		Leftover:      []Leftover{},
+	}
+	for _, l := range k.Leftover {
+		doc.Leftover = append(doc.Leftover, Leftover{Place: l.Place, X: length(l.At.X, "x", unit), Y: length(l.At.Y, "y", unit), Depth: length(l.Depth, "h", unit)})
 	}
 	return doc
 }

@@ -9,6 +9,7 @@ import (
 	"testing"
 
 	"github.com/santhosh-tekuri/jsonschema/v6"
+	"gonum.org/v1/gonum/spatial/r2"
 
 	"flankwright/export"
 	"flankwright/export/sidecar"
@@ -29,9 +30,13 @@ func gear(t *testing.T, unit export.Unit) []byte {
 	if err != nil {
 		t.Fatal(err)
 	}
-	g := export.Gear{Tooth: tooth, Drawn: drawn, Body: profile.Body{Bore: 6}, Unit: unit, Reference: true}
+	g := export.Gear{Tooth: tooth, Drawn: drawn, Bore: 6, Unit: unit, Reference: true}
 	input := map[string]any{"command": "gear", "module": "2mm", "teeth": "12", "reference": true}
-	d := sidecar.Gear(input, sidecar.Rack{Name: "iso53-a", Source: rack.Source}, g, g.Drawing(), tooth.Warnings)
+	d := sidecar.Gear(sidecar.Made{Input: input, Rack: sidecar.Rack{Name: "iso53-a", Source: rack.Source}, Gear: g, Drawing: g.Drawing(),
+		Warnings: tooth.Warnings,
+		Kerf: &sidecar.KerfReport{Width: 0.2, PartArea: 400, PartPerimeter: 150,
+			Leftover: []sidecar.LeftoverAt{{Place: "root fillet", Leftover: profile.Leftover{At: r2.Vec{X: 1, Y: 9}, Depth: 0.01}}}},
+		Choices: []sidecar.Chosen{{Flag: "label-height", Value: profile.LengthOf(3.5), Reason: "it fits"}}})
 	d.Files = append(d.Files, sidecar.File{Name: "x.dxf", Format: "dxf", Bytes: 1, SHA256: strings.Repeat("0", 64)})
 	data, err := d.Marshal()
 	if err != nil {

@@ -1,0 +1,174 @@
+package main
+
+import (
+	"errors"
+	"fmt"
+
+	"flankwright/export"
+	"flankwright/export/dxf"
+	"flankwright/export/sidecar"
+	"flankwright/profile"
+	"flankwright/profile/fit"
+	"flankwright/profile/label"
+)
+
+// gearMade is a gear ready to be written or reported.
+type gearMade struct {
+	gear     export.Gear
+	bore     float64 // mm, of the part
+	kerf     *sidecar.KerfReport
+	drawing  export.Drawing
+	dxf      dxf.Options
+	document *sidecar.Document
+	warnings []profile.Finding
+	choices  []sidecar.Chosen
+}
+
+// maker collects what the geometry refuses and warns of while a gear is made.
+type maker struct {
+	job      gearJob
+	tooth    *profile.Tooth
+	made     *gearMade
+	refused  profile.Violations
+	warnings []profile.Finding
+}
+
+// refuse notes violations; anything else is returned.
+func (m *maker) refuse(err error) error {
+	var found profile.Violations
+	if err == nil || !errors.As(err, &found) {
+		return err
+	}
+	m.refused = append(m.refused, found...)
+	return nil
+}
+
+// makeGear solves, fits and lays out. Everything the geometry refuses is reported
+// together, as far as it can be judged.
+func makeGear(j gearJob) (*gearMade, error) {
+	show := sidecar.Show(j.unit)
+	tooth, err := profile.Solve(j.spec)
+	if err != nil {
+		return nil, fromFindings(err, show)
+	}
+	m := &maker{job: j, tooth: tooth, made: &gearMade{dxf: j.dxf, bore: j.body.Bore}, warnings: tooth.Warnings}
+	m.made.gear = export.Gear{Tooth: tooth, Bore: j.body.Bore, Unit: j.unit, Turn: j.turn, Extent: j.extent, Reference: j.reference,
+		Cut: export.Cut{LeadIn: j.leadIn, Tabs: j.tabs, TabWidth: j.tabWidth}}
+	for _, step := range []func() error{m.makeBody, m.makeOutline, m.makeLabel} {
+		if err := step(); err != nil {
+			return nil, err
+		}
+	}
+	if m.refused != nil {
+		return nil, fromFindings(m.refused, show)
+	}
+	made := m.made
+	made.drawing = made.gear.Drawing()
+	made.warnings = m.warnings
+	made.document = sidecar.Gear(sidecar.Made{Input: j.input, Rack: j.rack, Gear: made.gear, Drawing: made.drawing,
+		Kerf: made.kerf, Choices: made.choices, Warnings: m.warnings})
+	return made, nil
+}
+
+// makeBody judges the bore, and the beam's path along it.
+func (m *maker) makeBody() error {
+	warnings, found := m.job.body.Check(m.tooth)
+	m.warnings = append(m.warnings, warnings...)
+	m.refused = append(m.refused, found...)
+	if m.job.kerf == 0 {
+		return nil
+	}
+	m.made.kerf = &sidecar.KerfReport{Width: m.job.kerf}
+	if m.job.body.Bore == 0 {
+		return nil
+	}
+	inner, err := m.job.body.Beam(m.job.kerf)
+	m.made.gear.Bore = inner
+	return m.refuse(err)
+}
+
+// makeOutline fits the toothed edge, or the beam's path along it.
+func (m *maker) makeOutline() error {
+	outline := m.tooth.Outline
+	if m.job.kerf > 0 {
+		beam, err := m.tooth.Beam(m.job.kerf)
+		if err != nil {
+			return m.refuse(err)
+		}
+		outline = beam.Outline
+		for _, at := range beam.Leftovers {
+			m.leave("root fillet", at)
+		}
+	}
+	drawn, err := fit.NewTooth(outline, m.job.fit)
+	if err != nil {
+		return m.refuse(err)
+	}
+	m.made.gear.Drawn = drawn
+	if m.made.kerf != nil {
+		part, err := fit.NewTooth(m.tooth.Outline, m.job.fit)
+		if err != nil {
+			return m.refuse(err)
+		}
+		edge := part.Outline(fit.Extent{}, 0)
+		m.made.kerf.PartArea, m.made.kerf.PartPerimeter = edge.Area(), edge.Length()
+		m.made.kerf.PartArea -= m.job.body.Area()
+	}
+	m.checkTabs(drawn)
+	return nil
+}
+
+// leave notes a place the beam cannot reach, once for places alike.
+func (m *maker) leave(place string, at profile.Leftover) {
+	known := false
+	for _, l := range m.made.kerf.Leftover {
+		known = known || l.Place == place
+	}
+	m.made.kerf.Leftover = append(m.made.kerf.Leftover, sidecar.LeftoverAt{Place: place, Leftover: at})
+	if known {
+		return
+	}
+	m.warnings = append(m.warnings, profile.Finding{Rule: profile.RuleKerfLeaves, Param: profile.ParamKerf,
+		Value: profile.LengthOf(m.job.kerf), Bound: profile.LengthOf(at.Depth),
+		Also: []profile.Quantity{profile.LengthOf(at.At.X), profile.LengthOf(at.At.Y)},
+		Text: fmt.Sprintf("a beam {value} wide leaves {bound} of material at the %s near ({0}, {1}) and places like it", place)})
+}
+
+// checkTabs judges tabs against the lands they lie on.
+func (m *maker) checkTabs(drawn *fit.Tooth) {
+	j := m.job
+	if j.tabs == 0 {
+		return
+	}
+	if j.tabs >= j.spec.Teeth {
+		m.refused = append(m.refused, profile.Finding{Rule: profile.RuleOutOfRange, Param: "tabs", Value: profile.NumberOf(float64(j.tabs)),
+			Bound: profile.NumberOf(float64(j.spec.Teeth - 1)),
+			Text:  "{value} tabs do not fit on the tip lands beside tooth 1", Hint: "ask for at most {bound}"})
+	}
+	if land := drawn.LandWidth(); j.tabWidth >= land {
+		m.refused = append(m.refused, profile.Finding{Rule: ruleTabTooWide, Param: "tabs", Value: profile.LengthOf(j.tabWidth),
+			Bound: profile.LengthOf(land).AtMost(),
+			Text:  "a tab {value} wide reaches onto the flanks: the tip land is {bound} wide", Hint: "make tabs narrower than {bound}"})
+	}
+}
+
+// ruleTabTooWide is broken by tabs wider than the land.
+const ruleTabTooWide profile.Rule = "tab-too-wide"
+
+// makeLabel places the label on the web.
+func (m *maker) makeLabel() error {
+	if m.job.label == "" {
+		return nil
+	}
+	web := profile.Web{Root: m.tooth.Dimensions.RootDiameter / 2, Bore: m.job.body.Bore / 2}
+	placed, err := label.Place(m.job.label, m.job.labelHeight, web)
+	if err != nil {
+		return m.refuse(err)
+	}
+	m.made.gear.Label = placed.Paths
+	if placed.Chosen {
+		m.made.choices = append(m.made.choices, sidecar.Chosen{Flag: string(label.ParamHeight), Value: profile.LengthOf(placed.Height),
+			Reason: "the largest ISO 3098 lettering height that fits on the web"})
+	}
+	return nil
+}
