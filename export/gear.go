@@ -6,15 +6,17 @@ import (
 	"gonum.org/v1/gonum/spatial/r2"
 
 	"flankwright/profile"
+	"flankwright/profile/body"
 	"flankwright/profile/fit"
 )
 
-// Gear is what a gear's sheet shows. With a kerf, Drawn and Bore are the path of the
+// Gear is what a gear's sheet shows. With a kerf, Drawn and Holes are the paths of the
 // beam, else the part's own edges.
 type Gear struct {
 	Tooth     *profile.Tooth
 	Drawn     *fit.Tooth
-	Bore      float64 // mm, diameter; 0 for none
+	Holes     []body.Loop
+	Fit       fit.Options // of the holes
 	Unit      Unit
 	Turn      float64 // rad, counter-clockwise
 	Extent    fit.Extent
@@ -30,19 +32,14 @@ type Cut struct {
 	TabWidth float64
 }
 
-// Drawing lays the gear out: bore, outline, then what is not an edge.
+// Drawing lays the gear out: inner loops, outline, then what is not an edge.
 func (g Gear) Drawing() Drawing {
 	d := Drawing{Unit: g.Unit}
 	var leads []Item
-	if g.Bore > 0 {
-		d.Items = append(d.Items, Item{Layer: LayerBore, Role: Hole, Circle: &Circle{Radius: g.Bore / 2}})
-		if g.Cut.LeadIn > 0 {
-			// At its lowest place, opposite tooth 1; a hole is travelled clockwise, there
-			// towards -X. It has room for half its radius.
-			up := r2.Rotate(r2.Vec{Y: 1}, g.Turn, r2.Vec{})
-			lowest := r2.Scale(-g.Bore/2, up)
-			leads = append(leads, leadIn(lowest, r2.Vec{X: -up.Y, Y: up.X}, math.Min(g.Cut.LeadIn, g.Bore/4)))
-		}
+	for _, l := range g.Holes {
+		item, lead := g.hole(l)
+		d.Items = append(d.Items, item)
+		leads = append(leads, lead...)
 	}
 	for _, path := range g.outline() {
 		d.Items = append(d.Items, Item{Layer: LayerOutline, Role: Outer, Path: &path})
@@ -70,6 +67,36 @@ func (g Gear) outline() []fit.Path {
 		return g.Drawn.TabbedOutline(g.Cut.Tabs, g.Cut.TabWidth, g.Turn)
 	}
 	return []fit.Path{g.Drawn.Outline(g.Extent, g.Turn)}
+}
+
+// hole is an inner loop and its lead-in, if asked for. A bore is led into at its lowest
+// place, opposite the keyway on +Y; a window at its outer edge.
+func (g Gear) hole(l body.Loop) (item Item, leads []Item) {
+	layer := LayerHoles
+	if l.Kind == body.Bore {
+		layer = LayerBore
+	}
+	up := r2.Rotate(r2.Vec{Y: 1}, g.Turn, r2.Vec{})
+	if center, radius, ok := l.Circle(); ok {
+		center = r2.Rotate(center, g.Turn, r2.Vec{})
+		if g.Cut.LeadIn > 0 {
+			lowest := r2.Sub(center, r2.Scale(radius, up))
+			// Clockwise at the lowest place is towards -X.
+			leads = append(leads, leadIn(lowest, r2.Vec{X: -up.Y, Y: up.X}, math.Min(g.Cut.LeadIn, radius/2)))
+		}
+		return Item{Layer: layer, Role: Hole, Circle: &Circle{Center: center, Radius: radius}}, leads
+	}
+	path, _ := fit.Loop(l.Pieces, g.Fit, g.Turn)
+	if g.Cut.LeadIn > 0 {
+		rate := r2.Norm
+		if l.Kind == body.Bore {
+			rate = func(p r2.Vec) float64 { return -r2.Dot(p, up) }
+		}
+		path = path.StartAt(path.BestStart(rate))
+		first := path.Segments[0]
+		leads = append(leads, leadIn(first.Start, first.StartTangent(), math.Min(g.Cut.LeadIn, roomForLead(path))))
+	}
+	return Item{Layer: layer, Role: Hole, Path: &path}, leads
 }
 
 // reference is what helps to place the part and is not to be cut.

@@ -19,3 +19,7 @@ func leadIn(at, along r2.Vec, radius float64) Item {
 	path := fit.Path{Segments: []fit.Segment{fit.ArcTo(pierce, at, quarter)}}
 	return Item{Layer: LayerLead, Role: Marker, Path: &path}
 }
+
+// roomForLead is how large a lead-in may be in mm inside a hole: half the radius of a
+// round one, and area by perimeter, which is that for a circle, of any other.
+func roomForLead(p fit.Path) float64 { return math.Abs(p.Area()) / p.Length() }

@@ -3,7 +3,7 @@
 Both DXF files are read with ezdxf and taken apart finely; the offset is made by
 shapely (GEOS), which knows nothing of this project. Prints as JSON the largest
 distance of the part's edge from the path moved back, and the other way round, over
-all loops. Usage: offset_back.py PART PATH WIDTH
+all loops, in the order of the files. Usage: offset_back.py PART PATH WIDTH
 """
 import json
 import sys
@@ -21,7 +21,6 @@ def loops(name):
         if e.dxf.layer in ("OUTLINE", "BORE", "HOLES"):
             points = [(v.x, v.y) for v in flat(e)]
             found.append(Polygon(points))
-    found.sort(key=lambda p: -p.area)
     return found
 
 
@@ -53,7 +52,7 @@ if len(part) != len(path):
     sys.exit(f"{len(part)} loops in the part, {len(path)} in the path")
 worst = []
 for i, (p, q) in enumerate(zip(part, path)):
-    # The outer loop is the largest; its path lies outside, those of holes inside.
-    back = q.buffer(-width / 2 if i == 0 else width / 2, 64)
+    # The outer loop comes last; its path lies outside, those of holes inside.
+    back = q.buffer(-width / 2 if i == len(part) - 1 else width / 2, 64)
     worst.append(back.boundary.hausdorff_distance(p.boundary))
 json.dump({"worst": worst, "valid": [p.is_valid for p in part + path]}, sys.stdout)

@@ -20,7 +20,8 @@ func TestKerfMovedBack(t *testing.T) {
 		kerf float64 // in the unit of the drawing
 		args []string
 	}{
-		"metric":   {0.25, []string{"--module", "2", "--teeth", "24", "--bore", "10"}},
+		"metric":   {0.25, []string{"--module", "2", "--teeth", "40", "--bore", "20", "--hole-circle", "5x6@55"}},
+		"windows":  {0.3, []string{"--module", "2", "--teeth", "60", "--windows", "4", "--bore", "20", "--hub-diameter", "36"}},
 		"undercut": {0.2, []string{"--module", "1.5", "--teeth", "9", "--bore", "4"}},
 		"inch":     {0.008, []string{"--diametral-pitch", "10", "--teeth", "21", "--bore", "0.5", "--tip-chamfer", "0.01"}},
 	} {
@@ -52,7 +53,8 @@ func TestKerfMovedBack(t *testing.T) {
 // TestBrowserFillsThePart: a browser's point-in-fill agrees with the exact loops on 1000
 // points.
 func TestBrowserFillsThePart(t *testing.T) {
-	args := []string{"--module", "2", "--teeth", "24", "--bore", "12", "--turn", "5"}
+	args := []string{"--module", "2", "--teeth", "60", "--bore", "20", "--keyway", "iso", "--hole-circle", "6x4@40", "--windows", "6",
+		"--hub-diameter", "52", "--turn", "5"}
 	dir := t.TempDir()
 	path := filepath.Join(dir, "part.svg")
 	if code, _, stderr := call(t, append([]string{"gear", "-o", path}, args...)...); code != exitDone {

@@ -8,6 +8,7 @@ import (
 	"flankwright/export/dxf"
 	"flankwright/export/sidecar"
 	"flankwright/profile"
+	"flankwright/profile/body"
 	"flankwright/profile/fit"
 	"flankwright/profile/label"
 )
@@ -15,7 +16,7 @@ import (
 // gearMade is a gear ready to be written or reported.
 type gearMade struct {
 	gear     export.Gear
-	bore     float64 // mm, of the part
+	body     *body.Body
 	kerf     *sidecar.KerfReport
 	drawing  export.Drawing
 	dxf      dxf.Options
@@ -51,8 +52,8 @@ func makeGear(j gearJob) (*gearMade, error) {
 	if err != nil {
 		return nil, fromFindings(err, show)
 	}
-	m := &maker{job: j, tooth: tooth, made: &gearMade{dxf: j.dxf, bore: j.body.Bore}, warnings: tooth.Warnings}
-	m.made.gear = export.Gear{Tooth: tooth, Bore: j.body.Bore, Unit: j.unit, Turn: j.turn, Extent: j.extent, Reference: j.reference,
+	m := &maker{job: j, tooth: tooth, made: &gearMade{dxf: j.dxf}, warnings: tooth.Warnings}
+	m.made.gear = export.Gear{Tooth: tooth, Fit: j.fit, Unit: j.unit, Turn: j.turn, Extent: j.extent, Reference: j.reference,
 		Cut: export.Cut{LeadIn: j.leadIn, Tabs: j.tabs, TabWidth: j.tabWidth}}
 	for _, step := range []func() error{m.makeBody, m.makeOutline, m.makeLabel} {
 		if err := step(); err != nil {
@@ -66,25 +67,44 @@ func makeGear(j gearJob) (*gearMade, error) {
 	made.drawing = made.gear.Drawing()
 	made.warnings = m.warnings
 	made.document = sidecar.Gear(sidecar.Made{Input: j.input, Rack: j.rack, Gear: made.gear, Drawing: made.drawing,
-		Kerf: made.kerf, Choices: made.choices, Warnings: m.warnings})
+		Features: made.features(), Kerf: made.kerf, Choices: made.choices, Warnings: m.warnings})
 	return made, nil
 }
 
-// makeBody judges the bore, and the beam's path along it.
+// makeBody solves bore, holes and windows, and the beam's path along them.
 func (m *maker) makeBody() error {
-	warnings, found := m.job.body.Check(m.tooth)
-	m.warnings = append(m.warnings, warnings...)
-	m.refused = append(m.refused, found...)
+	d := m.tooth.Dimensions
+	solved, err := body.Solve(m.job.body, body.Around{RootDiameter: d.RootDiameter, WholeDepth: d.WholeDepth})
+	if err != nil {
+		return m.refuse(err)
+	}
+	m.made.body = solved
+	for _, c := range solved.Choices {
+		m.choose(string(c.Param), c.Value, c.Why)
+	}
+	m.warnings = append(m.warnings, solved.Warnings...)
+	m.made.gear.Holes = solved.Loops
 	if m.job.kerf == 0 {
 		return nil
 	}
 	m.made.kerf = &sidecar.KerfReport{Width: m.job.kerf}
-	if m.job.body.Bore == 0 {
-		return nil
+	m.made.gear.Holes = nil
+	for _, l := range solved.Loops {
+		path, left, err := l.Parallel(m.job.kerf / 2)
+		if err != nil {
+			return m.refuse(err)
+		}
+		m.made.gear.Holes = append(m.made.gear.Holes, path)
+		for _, at := range left {
+			m.leave("corner of the "+l.Name, at)
+		}
 	}
-	inner, err := m.job.body.Beam(m.job.kerf)
-	m.made.gear.Bore = inner
-	return m.refuse(err)
+	return nil
+}
+
+// choose notes a value nobody gave.
+func (m *maker) choose(flag string, v profile.Quantity, reason string) {
+	m.made.choices = append(m.made.choices, sidecar.Chosen{Flag: flag, Value: v, Reason: reason})
 }
 
 // makeOutline fits the toothed edge, or the beam's path along it.
@@ -112,7 +132,9 @@ func (m *maker) makeOutline() error {
 		}
 		edge := part.Outline(fit.Extent{}, 0)
 		m.made.kerf.PartArea, m.made.kerf.PartPerimeter = edge.Area(), edge.Length()
-		m.made.kerf.PartArea -= m.job.body.Area()
+		if m.made.body != nil {
+			m.made.kerf.PartArea -= m.made.body.HoleArea()
+		}
 	}
 	m.checkTabs(drawn)
 	return nil
@@ -157,18 +179,26 @@ const ruleTabTooWide profile.Rule = "tab-too-wide"
 
 // makeLabel places the label on the web.
 func (m *maker) makeLabel() error {
-	if m.job.label == "" {
+	if m.job.label == "" || m.made.body == nil {
 		return nil
 	}
-	web := profile.Web{Root: m.tooth.Dimensions.RootDiameter / 2, Bore: m.job.body.Bore / 2}
-	placed, err := label.Place(m.job.label, m.job.labelHeight, web)
+	placed, err := label.Place(m.job.label, m.job.labelHeight, m.made.body)
 	if err != nil {
 		return m.refuse(err)
 	}
 	m.made.gear.Label = placed.Paths
 	if placed.Chosen {
-		m.made.choices = append(m.made.choices, sidecar.Chosen{Flag: string(label.ParamHeight), Value: profile.LengthOf(placed.Height),
-			Reason: "the largest ISO 3098 lettering height that fits on the web"})
+		m.choose(string(label.ParamHeight), profile.LengthOf(placed.Height), "the largest ISO 3098 lettering height that fits on the web")
 	}
 	return nil
+}
+
+// features are the finest features of the part: those of the body, the least radius of
+// the fillets, and the tip land.
+func (m *gearMade) features() []body.Feature {
+	d := m.gear.Tooth.Dimensions
+	return append([]body.Feature{
+		{Name: "inner radius", Place: "root fillets", Value: d.MinFilletRadius},
+		{Name: "tip land", Place: "teeth", Value: d.TipLand},
+	}, m.body.Features...)
 }

@@ -55,6 +55,16 @@ func gearParameters() []parameter {
 		{name: "min-tip-thickness", group: groupForm, value: "C", usage: "lowers the tip where needed to keep so much thickness"},
 
 		{name: "bore", group: groupBody, value: "L", usage: "diameter of a round bore"},
+		{name: "keyway", group: groupBody, value: "KEY", usage: "iso, ansi (the size for the bore) or WxD, width x depth from the bore's crown; on +Y", choices: []string{"iso", "ansi"}},
+		{name: "bore-flat", group: groupBody, value: "L", usage: "gives the bore a flat on +Y; L is the depth from the flat across the bore"},
+		{name: "bore-hex", group: groupBody, value: "L", usage: "hexagon bore, across flats"},
+		{name: "hole-circle", group: groupBody, value: "NxD@BCD", usage: "N holes of diameter D on bolt circle BCD, the first on +Y; repeatable", repeatable: true},
+		{name: "windows", group: groupBody, value: "N", usage: "N lightening windows between arms, an arm on +Y"},
+		{name: "rim-width", group: groupBody, value: "L", usage: "between windows and root circle (default 1.2 whole depths)"},
+		{name: "hub-diameter", group: groupBody, value: "L", usage: "of the hub inside the windows (default from the bore)"},
+		{name: "arm-width", group: groupBody, value: "L", usage: "of the arms between windows (default from the rim)"},
+		{name: "window-radius", group: groupBody, value: "L", usage: "of the windows' corners (default from their size)"},
+		{name: "min-feature", group: groupBody, value: "L", usage: "warns where a radius, web, gap or land is finer"},
 
 		{name: "curves", group: groupDrawing, value: "KIND", usage: "arcs, cubics or lines (default arcs)", choices: []string{"arcs", "cubics", "lines"}},
 		{name: "tolerance", group: groupDrawing, value: "L", usage: "largest distance between drawn and exact curve (default 1um)"},

@@ -21,6 +21,10 @@ func TestReadersTakeRealGears(t *testing.T) {
 		"undercut": {"--module", "1.5", "--teeth", "9", "--tip-radius", "0.1", "--turn", "12.5"},
 		"lines":    {"--module", "1", "--teeth", "17", "--curves", "lines", "--bore", "5", "--tolerance", "5um"},
 
+		// no O or 0 in the label: readers that chain segments take those for loops
+		"keyed":   {"--module", "2", "--teeth", "40", "--bore", "20", "--keyway", "iso", "--hole-circle", "5x6@55", "--kerf", "0.25", "--label", "Z41 M2", "--lead-in", "2"},
+		"windows": {"--diametral-pitch", "10", "--teeth", "60", "--bore", "0.75", "--keyway", "ansi", "--windows", "5"},
+
 		// every combination of curves, version and extent that a request can have
 		"arcs-tooth":      {"--module", "2", "--teeth", "24", "--extent", "tooth"},
 		"arcs-space":      {"--module", "2", "--teeth", "24", "--extent", "space"},

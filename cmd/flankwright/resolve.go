@@ -9,6 +9,7 @@ import (
 	"flankwright/export/dxf"
 	"flankwright/export/sidecar"
 	"flankwright/profile"
+	"flankwright/profile/body"
 	"flankwright/profile/fit"
 )
 
@@ -19,7 +20,7 @@ const defaultTolerance = 0.001
 // gearJob is a request put into numbers.
 type gearJob struct {
 	spec      profile.Spec
-	body      profile.Body
+	body      body.Spec
 	rack      sidecar.Rack
 	fit       fit.Options
 	unit      export.Unit
@@ -46,6 +47,7 @@ func resolveGear(req request) (gearJob, error) {
 	r.teeth(&j)
 	r.rack(&j, inch)
 	r.form(&j)
+	r.body(&j)
 	r.drawing(&j, inch)
 	r.cut(&j)
 	j.input = r.input
@@ -158,7 +160,7 @@ func (r *reader) rack(j *gearJob, inch bool) {
 	}
 }
 
-// form reads shift, thinning, tip and bore.
+// form reads shift, thinning and tip.
 func (r *reader) form(j *gearJob) {
 	s := &j.spec
 	s.ProfileShift, _ = r.number("profile-shift", "")
@@ -171,7 +173,6 @@ func (r *reader) form(j *gearJob) {
 	s.TipRadius, _ = r.length("tip-radius")
 	s.TipChamfer, _ = r.length("tip-chamfer")
 	s.MinTipThickness, _ = r.coefficient("min-tip-thickness")
-	j.body.Bore = r.positive("bore")
 }
 
 // positive reads a length that must be above zero where it is given, since zero

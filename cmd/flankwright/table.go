@@ -36,9 +36,6 @@ func printTable(out io.Writer, m *gearMade) error {
 	rows = append(rows,
 		export.Row{Name: "profile shift coefficient", Symbol: "x", Value: profile.NumberOf(spec.ProfileShift)},
 		export.Row{Name: "thinning on d", Symbol: "E", Value: profile.LengthOf(spec.Thinning)})
-	if m.bore > 0 {
-		rows = append(rows, export.Row{Name: "bore", Symbol: "d_B", Value: profile.LengthOf(m.bore)})
-	}
 	for _, r := range rows {
 		mm, inch := tableCells(r.Value)
 		fmt.Fprintf(w, "%s\t%s\t%s\t%s\n", r.Name, r.Symbol, mm, inch)

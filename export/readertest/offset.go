@@ -8,7 +8,7 @@ import (
 
 // OffsetBack moves the loops of a beam's path, in the DXF file path, back by half the
 // beam's width with a general geometry library (shapely) and returns for each, outline
-// first, how far it is from the part's in the DXF file part, in drawing units.
+// last, how far it is from the part's in the DXF file part, in drawing units.
 func OffsetBack(t testing.TB, part, path string, width float64) []float64 {
 	t.Helper()
 	python := python(t, "ezdxf, shapely", "python3-ezdxf python3-shapely")

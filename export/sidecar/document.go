@@ -30,6 +30,7 @@ type Document struct {
 	Dimensions map[string]any      `json:"dimensions"`
 	Outline    map[string]*Outline `json:"outline"`
 	Kerf       *Kerf               `json:"kerf,omitempty"`
+	Features   []Feature           `json:"features"`
 	Choices    []Choice            `json:"choices"`
 	Files      []File              `json:"files"`
 	Warnings   []Warning           `json:"warnings"`
@@ -65,6 +66,13 @@ type Leftover struct {
 	X     Value  `json:"x"`
 	Y     Value  `json:"y"`
 	Depth Value  `json:"depth"`
+}
+
+// Feature is one of the finest features of the part.
+type Feature struct {
+	Name  string `json:"name"`
+	Place string `json:"place"`
+	Value Value  `json:"value"`
 }
 
 // Choice is a value nobody gave and the program chose.

@@ -3,6 +3,7 @@ package sidecar
 import (
 	"flankwright/export"
 	"flankwright/profile"
+	"flankwright/profile/body"
 )
 
 // Rack names the basic rack of a request.
@@ -36,6 +37,7 @@ type Made struct {
 	Rack     Rack
 	Gear     export.Gear
 	Drawing  export.Drawing
+	Features []body.Feature
 	Kerf     *KerfReport // nil without a kerf
 	Choices  []Chosen
 	Warnings []profile.Finding
@@ -51,6 +53,7 @@ func Gear(m Made) *Document {
 		BasicRack:  map[string]any{"name": m.Rack.Name, "source": m.Rack.Source},
 		Dimensions: map[string]any{},
 		Outline:    map[string]*Outline{},
+		Features:   []Feature{},
 		Choices:    []Choice{},
 		Files:      []File{},
 		Warnings:   []Warning{},
@@ -74,6 +77,9 @@ func Gear(m Made) *Document {
 	}
 	if m.Kerf != nil {
 		doc.Kerf = kerf(*m.Kerf, unit)
+	}
+	for _, f := range m.Features {
+		doc.Features = append(doc.Features, Feature{Name: f.Name, Place: f.Place, Value: length(f.Value, f.Name, unit)})
 	}
 	for _, c := range m.Choices {
 		doc.Choices = append(doc.Choices, Choice{Flag: c.Flag, Value: value(c.Value, c.Flag, unit), Reason: c.Reason})

@@ -14,6 +14,7 @@ import (
 	"flankwright/export"
 	"flankwright/export/sidecar"
 	"flankwright/profile"
+	"flankwright/profile/body"
 	"flankwright/profile/fit"
 )
 
@@ -30,7 +31,7 @@ func gear(t *testing.T, unit export.Unit) []byte {
 	if err != nil {
 		t.Fatal(err)
 	}
-	g := export.Gear{Tooth: tooth, Drawn: drawn, Bore: 6, Unit: unit, Reference: true}
+	g := export.Gear{Tooth: tooth, Drawn: drawn, Holes: holes(t, tooth), Unit: unit, Reference: true}
 	input := map[string]any{"command": "gear", "module": "2mm", "teeth": "12", "reference": true}
 	d := sidecar.Gear(sidecar.Made{Input: input, Rack: sidecar.Rack{Name: "iso53-a", Source: rack.Source}, Gear: g, Drawing: g.Drawing(),
 		Warnings: tooth.Warnings,
@@ -43,6 +44,17 @@ func gear(t *testing.T, unit export.Unit) []byte {
 		t.Fatal(err)
 	}
 	return data
+}
+
+// holes are a bore with a keyway.
+func holes(t *testing.T, tooth *profile.Tooth) []body.Loop {
+	t.Helper()
+	d := tooth.Dimensions
+	b, err := body.Solve(body.Spec{Bore: 8, Keyway: body.Keyway{Standard: body.KeyISO}}, body.Around{RootDiameter: d.RootDiameter, WholeDepth: d.WholeDepth})
+	if err != nil {
+		t.Fatal(err)
+	}
+	return b.Loops
 }
 
 // validate judges a document by the schema of the package, with a validator of the
