@@ -18,6 +18,7 @@ type gearMade struct {
 	gear     export.Gear
 	body     *body.Body
 	kerf     *sidecar.KerfReport
+	features []body.Feature
 	drawing  export.Drawing
 	dxf      dxf.Options
 	document *sidecar.Document
@@ -63,11 +64,12 @@ func makeGear(j gearJob) (*gearMade, error) {
 	if m.refused != nil {
 		return nil, fromFindings(m.refused, show)
 	}
+	m.judgeFeatures()
 	made := m.made
 	made.drawing = made.gear.Drawing()
 	made.warnings = m.warnings
 	made.document = sidecar.Gear(sidecar.Made{Input: j.input, Rack: j.rack, Gear: made.gear, Drawing: made.drawing,
-		Features: made.features(), Kerf: made.kerf, Choices: made.choices, Warnings: m.warnings})
+		Features: made.features, Kerf: made.kerf, Choices: made.choices, Warnings: m.warnings})
 	return made, nil
 }
 
@@ -193,12 +195,25 @@ func (m *maker) makeLabel() error {
 	return nil
 }
 
-// features are the finest features of the part: those of the body, the least radius of
-// the fillets, and the tip land.
-func (m *gearMade) features() []body.Feature {
-	d := m.gear.Tooth.Dimensions
-	return append([]body.Feature{
-		{Name: "inner radius", Place: "root fillets", Value: d.MinFilletRadius},
-		{Name: "tip land", Place: "teeth", Value: d.TipLand},
-	}, m.body.Features...)
+// toothFeatures are the finest features of the teeth.
+func toothFeatures(t *profile.Tooth) []body.Feature {
+	d := t.Dimensions
+	return []body.Feature{
+		{Name: "inner radius", Place: "of the root fillets", Value: d.MinFilletRadius},
+		{Name: "tip land", Place: "of the teeth", Value: d.TipLand},
+	}
+}
+
+// judgeFeatures warns of features of the teeth that are finer than asked for; the body
+// has judged its own.
+func (m *maker) judgeFeatures() {
+	m.made.features = toothFeatures(m.tooth)
+	for _, f := range m.made.features {
+		if f.Value < m.job.body.MinFeature {
+			m.warnings = append(m.warnings, profile.Finding{Rule: body.RuleSmallFeature, Param: body.ParamMinFeature,
+				Value: profile.LengthOf(f.Value), Bound: profile.LengthOf(m.job.body.MinFeature),
+				Text: "the smallest " + f.Name + ", " + f.Place + ", is {value}, below the least feature {bound}"})
+		}
+	}
+	m.made.features = append(m.made.features, m.made.body.Features...)
 }

@@ -96,6 +96,11 @@ func (m *gearMade) reportLines() []string {
 		lines = append(lines, fmt.Sprintf("kerf %s: drawn is the path of the beam, tip diameter %s for the part's %s", show(profile.LengthOf(k.Width)),
 			show(profile.LengthOf(tip+k.Width)), show(profile.LengthOf(tip))))
 	}
+	var finest []string
+	for _, f := range m.features {
+		finest = append(finest, fmt.Sprintf("%s %s (%s)", f.Name, show(profile.LengthOf(f.Value)), f.Place))
+	}
+	lines = append(lines, "finest features: "+strings.Join(finest, "; "))
 	for _, c := range m.choices {
 		lines = append(lines, fmt.Sprintf("chosen: --%s %s, %s", c.Flag, show(c.Value), c.Reason))
 	}

@@ -79,7 +79,7 @@ func Gear(m Made) *Document {
 		doc.Kerf = kerf(*m.Kerf, unit)
 	}
 	for _, f := range m.Features {
-		doc.Features = append(doc.Features, Feature{Name: f.Name, Place: f.Place, Value: length(f.Value, f.Name, unit)})
+		doc.Features = append(doc.Features, Feature{Name: f.Name, Place: f.Place, Value: length(f.Value, featureSymbol(f.Name), unit)})
 	}
 	for _, c := range m.Choices {
 		doc.Choices = append(doc.Choices, Choice{Flag: c.Flag, Value: value(c.Value, c.Flag, unit), Reason: c.Reason})
@@ -89,6 +89,19 @@ func Gear(m Made) *Document {
 		doc.Warnings = append(doc.Warnings, Warning{Code: string(w.Rule), Message: message})
 	}
 	return doc
+}
+
+// featureSymbol is the symbol of a feature by its name; ours, but for the tip land's.
+func featureSymbol(name string) string {
+	switch name {
+	case "inner radius":
+		return "r_i"
+	case "tip land":
+		return "s_aK"
+	case "web":
+		return "w"
+	}
+	return "g"
 }
 
 // kerf gives the report of a beam's path in the unit of the drawing.

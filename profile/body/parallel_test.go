@@ -38,7 +38,7 @@ func widest(t failer, l body.Loop) float64 {
 func TestParallelDistance(t *testing.T) {
 	for _, l := range samples(t) {
 		largest := widest(t, l)
-		for _, d := range []float64{0.001, 0.05, 0.1, 0.25, 0.25 + 1e-9, 1, 0.5 * largest, 0.9 * largest, 0.9999 * largest} {
+		for _, d := range []float64{0.001, 0.05, 0.1, 0.25 + 1e-9, 1, 0.5 * largest, 0.9 * largest, 0.9999 * largest} {
 			if d > largest {
 				continue
 			}

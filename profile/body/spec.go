@@ -87,6 +87,9 @@ const (
 	// and below half of the last digit messages print (1e-4), so that a diameter below a
 	// printed bound keeps it.
 	leastPiece = 1e-5
+	// leastCorner is the smallest radius in mm of a window's corner, whose arcs are a
+	// fraction of it long.
+	leastCorner = 10 * leastPiece
 )
 
 // checkLimits lists what is not finite, out of range, or contradicts something else.
@@ -101,13 +104,15 @@ func (s Spec) checkLimits(around Around) profile.Violations {
 		{param: ParamRimWidth, value: s.Windows.RimWidth, high: maxLength},
 		{param: ParamHubDiameter, value: s.Windows.HubDiameter, high: maxLength},
 		{param: ParamArmWidth, value: s.Windows.ArmWidth, high: maxLength},
-		{param: ParamWindowRadius, value: s.Windows.CornerRadius, high: maxLength},
 		{param: ParamMinFeature, value: s.MinFeature, high: maxLength},
 	}
 	if s.Keyway.Standard == KeyCustom {
 		limits = append(limits,
 			limit{param: ParamKeyway, value: s.Keyway.Width, low: leastPiece, high: maxLength},
 			limit{param: ParamKeyway, value: s.Keyway.Depth, low: leastPiece, high: maxLength})
+	}
+	if r := s.Windows.CornerRadius; r != 0 {
+		limits = append(limits, limit{param: ParamWindowRadius, value: r, low: leastCorner, high: maxLength})
 	}
 	loops := 0
 	for _, h := range s.HoleCircles {

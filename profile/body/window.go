@@ -31,12 +31,17 @@ func (w window) widestArm() float64 { return 2 * w.hub * w.sin() }
 //	(R_o s - a/2)/(1 + s)                the outer edge: both its centers are one
 //	(R_h s - a/2)/(1 - s)                the hub's edge: likewise; never with two arms
 //
-// with s = sin(pi/n), the sine of the angle of a center in the window's middle.
+// with s = sin(pi/n), the sine of the angle of a center in the window's middle. In front
+// of a small hub corners grow much while its edge shrinks little, so there the limit is
+// where leastPiece is left of it: its length is
+//
+//	2 R_h (pi/n - asin q) >= 2 R_h (s - q),   q = (a/2 + rho)/(R_h + rho)
 func (w window) largestCorner() float64 {
 	s := w.sin()
 	largest := math.Min((w.outer-w.hub)/2, (w.outer*s-w.arm/2)/(1+s))
 	if w.n > 2 {
-		largest = math.Min(largest, (w.hub*s-w.arm/2)/(1-s))
+		short := leastPiece / (2 * w.hub)
+		largest = math.Min(largest, (w.hub*(s-short)-w.arm/2)/(1-s+short))
 	}
 	return largest
 }

@@ -59,17 +59,19 @@ func (b *builder) windows() {
 		w.corner = math.Min(cornerShare*(w.outer-w.hub), cornerOfLargest*largest)
 		b.choose(ParamWindowRadius, w.corner, "a quarter of the windows' depth, at most half of what fits; ours")
 	}
-	// Where a piece is nearly gone its length is at least about as much as the radius is
-	// below the largest, but at the hub of many windows.
-	pieces := w.loop
-	if w.corner >= largest || (Loop{Pieces: pieces(0)}).shortest() < leastPiece {
+	if w.corner >= largest {
 		b.refuse(profile.Finding{Rule: RuleWindowRadiusLarge, Param: ParamWindowRadius, Value: profile.LengthOf(w.corner), Bound: profile.LengthOf(largest).AtMost(),
 			Text: "corners of radius {value} do not fit into the windows", Hint: "make them smaller than {bound}"})
 		return
 	}
+	if (Loop{Pieces: w.loop(0)}).shortest() < leastPiece {
+		b.refuse(profile.Finding{Rule: RuleNoRoomForWindows, Param: ParamWindows, Value: profile.NumberOf(float64(w.n)),
+			Text: "{value} windows are too fine to draw", Hint: "take fewer windows, narrower arms or a larger hub"})
+		return
+	}
 	g := group{param: ParamWindows, name: "window"}
 	for k := range w.n {
-		g.loops = append(g.loops, Loop{Kind: Hole, Name: g.name, Pieces: pieces(k)})
+		g.loops = append(g.loops, Loop{Kind: Hole, Name: g.name, Pieces: w.loop(k)})
 	}
 	if bore, ok := b.bored(); ok && !hubHolds(g.loops, bore.loops[0]) {
 		b.refuse(profile.Finding{Rule: RuleHubIntoBore, Param: ParamHubDiameter, Value: profile.LengthOf(2 * w.hub), Bound: profile.LengthOf(2 * bore.loops[0].reach()).AtLeast(),
