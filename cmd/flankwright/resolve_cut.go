@@ -52,6 +52,9 @@ func (r *reader) cut(j *gearJob) {
 		}
 	}
 	if s, ok := r.value("label"); ok {
+		if strings.TrimSpace(s) == "" {
+			r.fail("label", "", "is empty", "give the text, or leave --label out")
+		}
 		j.label = s
 		r.input["label"] = s
 	}

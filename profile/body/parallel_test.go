@@ -6,6 +6,7 @@ import (
 	"testing"
 
 	"gonum.org/v1/gonum/spatial/r2"
+	"pgregory.net/rapid"
 
 	"flankwright/profile"
 	"flankwright/profile/body"
@@ -179,4 +180,36 @@ func TestParallelCircle(t *testing.T) {
 	if was, _, _ := l.Circle(); !ok || center != was || radius != 3 {
 		t.Errorf("%+v", path)
 	}
+}
+
+// TestParallelAny follows the loops of any body at any distance below the widest: there
+// is a path all the way, and it keeps the distance.
+func TestParallelAny(t *testing.T) {
+	t.Parallel()
+	rapid.Check(t, func(t *rapid.T) {
+		_, b := anyMade(t)
+		if len(b.Loops) == 0 {
+			t.Skip("nothing to follow")
+		}
+		l := rapid.SampledFrom(b.Loops).Draw(t, "loop")
+		d := widest(t, l) * rapid.Float64Range(1e-3, 1).Draw(t, "share")
+		path, left := offset(t, l, d)
+		if fault := simple(path); fault != "" {
+			t.Fatalf("%s at %v: %s in %+v", l.Name, d, fault, path)
+		}
+		for _, p := range points(path, 8) {
+			if c := -l.Clearance(p); math.Abs(c-d) > 2e-6 {
+				t.Fatalf("%s at %v: %v is %v away", l.Name, d, p, c)
+			}
+		}
+		deepest := 0.0
+		for _, p := range left {
+			deepest = math.Max(deepest, p.Depth)
+		}
+		for _, p := range points(l, 8) {
+			if far := math.Abs(path.Clearance(p)) - d; far > deepest+1e-6 {
+				t.Fatalf("%s at %v: %v left at %v, reported at most %v", l.Name, d, far, p, deepest)
+			}
+		}
+	})
 }

@@ -23,22 +23,22 @@ func (w window) sin() float64 { return math.Sin(math.Pi / float64(w.n)) }
 // sides are a/2 beside the arms' middles, which are pi/n from the window's.
 func (w window) widestArm() float64 { return 2 * w.hub * w.sin() }
 
-// largestCorner is the corner radius at which a piece of the window vanishes, the least
-// of three. A corner's center is a/2 + rho beside the middle of its arm, at R_o - rho
-// from the axis at the outer edge and R_h + rho at the hub.
+// largestCorner is the corner radius at which a piece of the window vanishes, the lesser
+// of two. A corner's center is a/2 + rho beside the middle of its arm, at R_o - rho from
+// the axis at the outer edge and R_h + rho at the hub.
 //
-//	(R_o - R_h)/2                        the side of the arm: both centers are one
-//	(R_o s - a/2)/(1 + s)                the outer edge: both its centers are one
-//	(R_h s - a/2)/(1 - s)                the hub's edge: likewise; never with two arms
+//	(R_o - R_h)/2              the side of the arm: both centers are one
+//	(R_h s - a/2)/(1 - s)      the hub's edge: likewise; never with two arms
 //
-// with s = sin(pi/n), the sine of the angle of a center in the window's middle. In front
-// of a small hub corners grow much while its edge shrinks little, so there the limit is
-// where leastPiece is left of it: its length is
+// with s = sin(pi/n), the sine of the angle of a center in the window's middle. The outer
+// edge is never the first to vanish: that far out there is more room between the arms. In
+// front of a small hub corners grow much while its edge shrinks little, so there the limit
+// is where leastPiece is left of it: its length is
 //
 //	2 R_h (pi/n - asin q) >= 2 R_h (s - q),   q = (a/2 + rho)/(R_h + rho)
 func (w window) largestCorner() float64 {
 	s := w.sin()
-	largest := math.Min((w.outer-w.hub)/2, (w.outer*s-w.arm/2)/(1+s))
+	largest := (w.outer - w.hub) / 2
 	if w.n > 2 {
 		short := leastPiece / (2 * w.hub)
 		largest = math.Min(largest, (w.hub*(s-short)-w.arm/2)/(1-s+short))
