@@ -31,7 +31,7 @@ func gear(t *testing.T, unit export.Unit) []byte {
 	if err != nil {
 		t.Fatal(err)
 	}
-	g := export.Gear{Tooth: tooth, Drawn: drawn, Holes: holes(t, tooth), Unit: unit, Reference: true}
+	g := export.Gear{Tooth: tooth, Drawn: drawn, Holes: holes(t, tooth), Fit: fit.Options{Curves: fit.Arc, Tolerance: 1e-3}, Unit: unit, Reference: true}
 	input := map[string]any{"command": "gear", "module": "2mm", "teeth": "12", "reference": true}
 	d := sidecar.Gear(sidecar.Made{Input: input, Rack: sidecar.Rack{Name: "iso53-a", Source: rack.Source}, Gear: g, Drawing: g.Drawing(),
 		Warnings: tooth.Warnings,

@@ -13,11 +13,17 @@ import (
 // straight lines stay what they are, except that chords are drawn where the options ask
 // for lines.
 func Loop(pieces []profile.Piece, o Options, turn float64) (Path, float64) {
+	if !(o.Tolerance >= LeastTolerance) {
+		panic("fit: tolerance below LeastTolerance")
+	}
 	o.Tolerance -= pointRounding
 	rotate := r2.NewRotation(turn, r2.Vec{}).Rotate
 	var c chain
 	worst := 0.0
 	for _, p := range pieces {
+		if from, to := p.Curve.Domain(); math.Abs(to-from)*p.Curve.Speed((from+to)/2) < ShortestSegment {
+			continue
+		}
 		var list []Segment
 		var deviation float64
 		if o.Curves == Line {
