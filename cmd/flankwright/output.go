@@ -12,6 +12,7 @@ import (
 
 	"flankwright/export/dxf"
 	"flankwright/export/files"
+	"flankwright/export/sheet"
 	"flankwright/export/sidecar"
 	"flankwright/export/svg"
 )
@@ -127,7 +128,12 @@ func (o output) render(m *gearMade) ([]files.File, error) {
 	for _, path := range o.paths {
 		data, err := m.marshal(formatOf(path))
 		if err != nil {
-			return nil, problems{{flag: "output", value: path, message: err.Error(), exit: exitGeometry}}
+			p := problem{flag: "output", value: path, message: err.Error(), exit: exitGeometry}
+			var failure *sheet.Error
+			if errors.As(err, &failure) && failure.Rule == sheet.RulePrecision {
+				p.hint = "draw so large a part with --curves arcs and without --loose"
+			}
+			return nil, problems{p}
 		}
 		set = append(set, files.File{Name: path, Data: data})
 		sum := sha256.Sum256(data)
