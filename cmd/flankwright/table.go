@@ -122,7 +122,7 @@ func outlineLine(m *gearMade) string {
 		}
 		size := r.Bounds.Size()
 		return fmt.Sprintf("outline: %s (least possible: %d arcs), shortest %s; deviation %s of %s allowed; extents %.4f x %.4f mm (%.4f x %.4f in)",
-			strings.Join(entities, ", "), m.gear.Drawn.ArcLimit(m.gear.Extent), profile.LengthOf(r.Shortest), micrometres(m.gear.Drawn.Deviation),
+			strings.Join(entities, ", "), m.gear.Drawn.ArcLimit(m.gear.Extent), sidecar.Show(m.gear.Unit)(profile.LengthOf(r.Shortest)), micrometres(m.gear.Drawn.Deviation),
 			micrometres(m.gear.Drawn.Tolerance), size.X, size.Y, size.X*inchPerMM, size.Y*inchPerMM)
 	}
 	return ""
