@@ -74,6 +74,9 @@ type Item struct {
 	Role   Role
 	Path   *fit.Path
 	Circle *Circle
+	// Tolerance and Deviation are, for an edge, the largest distance from the exact edge
+	// that was allowed and that was found, in mm.
+	Tolerance, Deviation float64
 }
 
 // Bounds returns the least box around the item.

@@ -42,7 +42,8 @@ func (g Gear) Drawing() Drawing {
 		leads = append(leads, lead...)
 	}
 	for _, path := range g.outline() {
-		d.Items = append(d.Items, Item{Layer: LayerOutline, Role: Outer, Path: &path})
+		d.Items = append(d.Items, Item{Layer: LayerOutline, Role: Outer, Path: &path,
+			Tolerance: g.Drawn.Tolerance, Deviation: g.Drawn.Deviation})
 		if g.Cut.LeadIn > 0 {
 			first := path.Segments[0]
 			leads = append(leads, leadIn(first.Start, first.StartTangent(), g.Cut.LeadIn))
@@ -84,9 +85,9 @@ func (g Gear) hole(l body.Loop) (item Item, leads []Item) {
 			// Clockwise at the lowest place is towards -X.
 			leads = append(leads, leadIn(lowest, r2.Vec{X: -up.Y, Y: up.X}, math.Min(g.Cut.LeadIn, radius/2)))
 		}
-		return Item{Layer: layer, Role: Hole, Circle: &Circle{Center: center, Radius: radius}}, leads
+		return Item{Layer: layer, Role: Hole, Circle: &Circle{Center: center, Radius: radius}, Tolerance: g.Fit.Tolerance}, leads
 	}
-	path, _ := fit.Loop(l.Pieces, g.Fit, g.Turn)
+	path, deviation := fit.Loop(l.Pieces, g.Fit, g.Turn)
 	if g.Cut.LeadIn > 0 {
 		rate := r2.Norm
 		if l.Kind == body.Bore {
@@ -96,7 +97,7 @@ func (g Gear) hole(l body.Loop) (item Item, leads []Item) {
 		first := path.Segments[0]
 		leads = append(leads, leadIn(first.Start, first.StartTangent(), math.Min(g.Cut.LeadIn, roomForLead(path))))
 	}
-	return Item{Layer: layer, Role: Hole, Path: &path}, leads
+	return Item{Layer: layer, Role: Hole, Path: &path, Tolerance: g.Fit.Tolerance, Deviation: deviation}, leads
 }
 
 // reference is what helps to place the part and is not to be cut.

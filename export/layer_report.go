@@ -18,6 +18,8 @@ type LayerReport struct {
 	Length   float64        // sum of the lengths of its loops
 	Bounds   r2.Box
 	Closed   bool // whether every loop is closed
+	// Tolerance and Deviation are the largest of the layer's edges; zero without edges.
+	Tolerance, Deviation float64
 }
 
 // kindName is the word for a kind of segment in reports.
@@ -52,6 +54,8 @@ func (d Drawing) Report() []LayerReport {
 func (r *LayerReport) add(it Item) {
 	r.Loops++
 	r.Bounds = union(r.Bounds, it.Bounds())
+	r.Tolerance = math.Max(r.Tolerance, it.Tolerance)
+	r.Deviation = math.Max(r.Deviation, it.Deviation)
 	if c := it.Circle; c != nil {
 		around := 2 * math.Pi * c.Radius
 		r.Entities["circle"]++

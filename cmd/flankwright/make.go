@@ -4,6 +4,8 @@ import (
 	"errors"
 	"fmt"
 
+	"gonum.org/v1/gonum/spatial/r2"
+
 	"flankwright/export"
 	"flankwright/export/dxf"
 	"flankwright/export/sidecar"
@@ -142,8 +144,10 @@ func (m *maker) makeOutline() error {
 	return nil
 }
 
-// leave notes a place the beam cannot reach, once for places alike.
+// leave notes a place the beam cannot reach, where it is in the drawing; the warning is
+// given once for places alike.
 func (m *maker) leave(place string, at profile.Leftover) {
+	at.At = r2.Rotate(at.At, m.job.turn, r2.Vec{})
 	known := false
 	for _, l := range m.made.kerf.Leftover {
 		known = known || l.Place == place

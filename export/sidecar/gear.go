@@ -67,10 +67,11 @@ func Gear(m Made) *Document {
 	}
 	for _, r := range m.Drawing.Report() {
 		o := outline(r, unit)
-		if r.Layer == export.LayerOutline {
-			tolerance := length(m.Gear.Drawn.Tolerance, "e", unit)
-			deviation := length(m.Gear.Drawn.Deviation, "e_max", unit)
+		if r.Tolerance > 0 {
+			tolerance, deviation := length(r.Tolerance, "e", unit), length(r.Deviation, "e_max", unit)
 			o.Tolerance, o.Deviation = &tolerance, &deviation
+		}
+		if r.Layer == export.LayerOutline {
 			o.ArcLimit = m.Gear.Drawn.ArcLimit(m.Gear.Extent)
 		}
 		doc.Outline[string(r.Layer)] = o
