@@ -13,6 +13,7 @@ const (
 	RuleFolder    Rule = "its folder does not exist"
 	RuleIrregular Rule = "is not a regular file"
 	RuleReadOnly  Rule = "is read-only"
+	RulePortable  Rule = "is no name for a file"
 	RuleIO        Rule = "input or output failed"
 )
 
@@ -20,7 +21,7 @@ const (
 type Error struct {
 	Rule  Rule
 	Path  string // as it was given, or resolved for RuleIO
-	Other string // the other name, for RuleDuplicate
+	Other string // the other name, for RuleDuplicate; why, for RulePortable
 	Op    string // what failed, for RuleIO: create, write, close, rename, ...
 	Err   error  // the cause, if the system gave one
 }
@@ -32,6 +33,8 @@ func (e *Error) Error() string {
 		return fmt.Sprintf("cannot %s %q: %v", e.Op, e.Path, e.Err)
 	case RuleDuplicate:
 		return fmt.Sprintf("%q and %q are one file", e.Other, e.Path)
+	case RulePortable:
+		return fmt.Sprintf("%q %s: %s", e.Path, string(e.Rule), e.Other)
 	case RuleName:
 		return string(e.Rule)
 	}

@@ -222,3 +222,30 @@ func TestNoPermission(t *testing.T) {
 		t.Errorf("%v", err)
 	}
 }
+
+// TestPendingOnFullDisk fails each operation in turn.
+func TestPendingOnFullDisk(t *testing.T) {
+	for left := range 20 {
+		dir := t.TempDir()
+		sys := &broken{left: left}
+		p, err := create(sys, Options{}, target{path: filepath.Join(dir, "x")})
+		if err == nil {
+			_, err = p.Write([]byte("some"))
+			if err == nil {
+				err = p.Commit()
+			} else {
+				p.Abandon()
+			}
+		}
+		if err == nil {
+			if left < 3 {
+				t.Errorf("only %d operations before success", left)
+			}
+			return
+		}
+		if names := listing(t, dir); names != nil {
+			t.Errorf("after %v the folder holds %v", err, names)
+		}
+	}
+	t.Error("it never succeeded")
+}

@@ -31,6 +31,8 @@ type File struct {
 type Options struct {
 	// Sync flushes each file, and each folder after the renames, to the disk.
 	Sync bool
+	// Tag stands in the names of temporary files, to tell whose they are.
+	Tag string
 }
 
 // Names of temporary files start and end in these; a random part is between.
@@ -75,7 +77,7 @@ type target struct {
 	done   bool        // renamed
 }
 
-func write(ctx context.Context, fs fileSystem, opt Options, set []File) (err error) {
+func write(ctx context.Context, fs fileSystem, opt Options, set []File) error {
 	names := make([]string, len(set))
 	for i, f := range set {
 		names[i] = f.Name
@@ -84,6 +86,11 @@ func write(ctx context.Context, fs fileSystem, opt Options, set []File) (err err
 	if err != nil || len(ts) == 0 {
 		return err
 	}
+	return writeTo(ctx, fs, opt, ts, set)
+}
+
+// writeTo writes the files to their targets.
+func writeTo(ctx context.Context, fs fileSystem, opt Options, ts []target, set []File) (err error) {
 	defer func() {
 		if err != nil {
 			undo(fs, ts)
@@ -113,7 +120,7 @@ func rename(fs fileSystem, opt Options, ts []target) error {
 	for i := range ts {
 		if ts[i].exists {
 			// Failing to link is no error: it only costs the way back.
-			ts[i].backup = link(fs, ts[i].path)
+			ts[i].backup = link(fs, opt, ts[i].path)
 		}
 	}
 	last := &ts[len(ts)-1]

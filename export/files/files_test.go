@@ -176,7 +176,7 @@ func TestRefused(t *testing.T) {
 }
 
 func TestTemporary(t *testing.T) {
-	if name := filepath.Base(tempName("/x/y.dxf")); !Temporary(name) || Temporary("y.dxf") {
+	if name := filepath.Base(tempName(Options{}, "/x/y.dxf")); !Temporary(name) || Temporary("y.dxf") {
 		t.Errorf("%s is not recognised", name)
 	}
 }

@@ -57,6 +57,13 @@ func resolve(sys fileSystem, name string) (target, error) {
 		return target{path: path}, nil
 	case err != nil:
 		return target{}, folderError(name, err)
+	}
+	return existing(name, path, info)
+}
+
+// existing is the target of a name under which something stands at path.
+func existing(name, path string, info fs.FileInfo) (target, error) {
+	switch {
 	case info.IsDir():
 		return target{}, &Error{Rule: RuleDirectory, Path: name}
 	case !info.Mode().IsRegular():
