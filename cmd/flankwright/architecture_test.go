@@ -21,6 +21,7 @@ var layers = []string{
 	"export/fixed",
 	"export/sheet",
 	"export/dxf", "export/svg", "export/sidecar", "export/files",
+	"cmd/flankwright/internal/table",
 	"cmd/flankwright",
 }
 

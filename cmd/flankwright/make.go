@@ -70,7 +70,7 @@ func makeGear(j gearJob) (*gearMade, error) {
 	made := m.made
 	made.drawing = made.gear.Drawing()
 	made.warnings = m.warnings
-	made.document = sidecar.Gear(sidecar.Made{Input: j.input, Rack: j.rack, Gear: made.gear, Drawing: made.drawing,
+	made.document = sidecar.Gear(sidecar.Made{Program: program(), Input: j.input, Rack: j.rack, Gear: made.gear, Drawing: made.drawing,
 		Features: made.features, Kerf: made.kerf, Choices: made.choices, Warnings: m.warnings})
 	return made, nil
 }

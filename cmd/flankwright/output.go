@@ -2,8 +2,6 @@ package main
 
 import (
 	"context"
-	"crypto/sha256"
-	"encoding/hex"
 	"errors"
 	"fmt"
 	"os"
@@ -136,9 +134,7 @@ func (o output) render(m *gearMade) ([]files.File, error) {
 			return nil, problems{p}
 		}
 		set = append(set, files.File{Name: path, Data: data})
-		sum := sha256.Sum256(data)
-		m.document.Files = append(m.document.Files, sidecar.File{Name: filepath.Base(path), Format: formatOf(path),
-			Bytes: len(data), SHA256: hex.EncodeToString(sum[:])})
+		m.document.Files = append(m.document.Files, described(files.File{Name: path, Data: data}))
 	}
 	return set, nil
 }

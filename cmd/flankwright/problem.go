@@ -46,11 +46,15 @@ func (ps problems) Error() string {
 	return strings.Join(lines, "; ")
 }
 
-// exit is the code of the gravest kind: a malformed request before geometry,
-// since the geometry was judged on a guess then.
+// exit is the code of the gravest kind: output that failed before rows of a family
+// that did, a malformed request before geometry, since the geometry was judged on a
+// guess then.
 func (ps problems) exit() int {
 	code := exitFailed
 	for _, p := range ps {
+		if p.exit == exitFailed {
+			return exitFailed
+		}
 		if p.exit == exitMalformed {
 			return exitMalformed
 		}

@@ -38,6 +38,9 @@ type gearJob struct {
 	input       map[string]any
 }
 
+func (j gearJob) normalized() map[string]any { return j.input }
+func (j gearJob) make() (*gearMade, error)   { return makeGear(j) }
+
 // resolveGear reads a request for a gear. All that is malformed is reported
 // together.
 func resolveGear(req request) (gearJob, error) {

@@ -14,6 +14,7 @@ const (
 	exitFailed      = 1   // input or output failed
 	exitMalformed   = 2   // the request is malformed
 	exitGeometry    = 3   // the geometry cannot be made
+	exitRows        = 4   // some rows of a family failed, the others are written
 	exitInterrupted = 130 // as shells report SIGINT
 )
 
@@ -68,6 +69,6 @@ sidecar of dimensions. What cannot be made is refused, with what would work.`,
 	root.SetErr(io.err)
 	root.SetFlagErrorFunc(flagError)
 	root.SetUsageFunc(usage)
-	root.AddCommand(newGear(io), newBasicRacks(io), newVersion(io), newSidecarTopic())
+	root.AddCommand(newGear(io), newFamily(io), newBasicRacks(io), newVersion(io), newSidecarTopic())
 	return root
 }

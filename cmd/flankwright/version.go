@@ -11,6 +11,9 @@ import (
 // version is raised with each release; see DEVELOPERS.md.
 const version = "0.1.0"
 
+// program is the program and its version, as sidecars name it.
+func program() string { return "flankwright " + version }
+
 func newVersion(io streams) *cobra.Command {
 	return &cobra.Command{
 		Use:   "version",

@@ -24,6 +24,7 @@ var Schema string
 // Document is the sidecar of one part.
 type Document struct {
 	Schema     string              `json:"schema"`
+	Program    string              `json:"program"` // and its version
 	Input      map[string]any      `json:"input"`
 	Unit       string              `json:"unit"`
 	BasicRack  map[string]any      `json:"basic_rack"`
@@ -117,6 +118,15 @@ type Decimal float64
 // decimals is how many decimals are written: as many as in the drawing, few enough
 // that rounding of the last bits does not show on another machine.
 const decimals = 9
+
+// String is the number as it is written.
+func (d Decimal) String() string {
+	text, err := d.MarshalJSON()
+	if err != nil {
+		return err.Error()
+	}
+	return string(text)
+}
 
 // MarshalJSON rounds once.
 func (d Decimal) MarshalJSON() ([]byte, error) {

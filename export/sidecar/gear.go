@@ -33,6 +33,7 @@ type LeftoverAt struct {
 
 // Made is all that a document of a gear tells.
 type Made struct {
+	Program  string // and its version
 	Input    map[string]any
 	Rack     Rack
 	Gear     export.Gear
@@ -48,6 +49,7 @@ func Gear(m Made) *Document {
 	unit := m.Gear.Unit
 	doc := &Document{
 		Schema:     SchemaID,
+		Program:    m.Program,
 		Input:      m.Input,
 		Unit:       unit.String(),
 		BasicRack:  map[string]any{"name": m.Rack.Name, "source": m.Rack.Source},

@@ -1,0 +1,42 @@
+package main
+
+// form is one kind of part: a command of its own, and a form of rows in a table.
+type form struct {
+	name       string
+	parameters func() []parameter
+	resolve    func(request) (job, error)
+}
+
+// job is a request put into numbers, ready to be made.
+type job interface {
+	// normalized is the request as the sidecar keeps it.
+	normalized() map[string]any
+	make() (*gearMade, error)
+}
+
+// forms are the kinds of part that there are.
+func forms() []form {
+	return []form{
+		{"gear", gearParameters, func(r request) (job, error) { return resolveGear(r) }},
+	}
+}
+
+// formNames are the names of all forms.
+func formNames() []string {
+	var names []string
+	for _, f := range forms() {
+		names = append(names, f.name)
+	}
+	return names
+}
+
+// flags are the flags of the form that say what is made.
+func (f form) flags() map[string]bool {
+	flags := map[string]bool{}
+	for _, p := range f.parameters() {
+		if !p.transient {
+			flags[p.name] = true
+		}
+	}
+	return flags
+}
