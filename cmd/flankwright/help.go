@@ -109,3 +109,12 @@ func newSidecarTopic() *cobra.Command {
 		Long:  strings.TrimRight(sidecar.Schema, "\n"),
 	}
 }
+
+// newFamilyTopic is a help topic: the schema of a family's list.
+func newFamilyTopic() *cobra.Command {
+	return &cobra.Command{
+		Use:   "family-list",
+		Short: "The JSON Schema of family.json",
+		Long:  strings.TrimRight(sidecar.FamilySchema, "\n"),
+	}
+}

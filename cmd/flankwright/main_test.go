@@ -4,13 +4,22 @@ import (
 	"bytes"
 	"context"
 	"os"
+	"os/exec"
 	"strings"
 	"testing"
 
 	"github.com/rogpeppe/go-internal/testscript"
 )
 
+// asProgram in the environment makes the test binary be the program itself, to be
+// killed or measured from outside.
+const asProgram = "FLANKWRIGHT_TEST_AS_PROGRAM"
+
 func TestMain(m *testing.M) {
+	if os.Getenv(asProgram) != "" {
+		main()
+		return
+	}
 	testscript.Main(m, map[string]func(){"flankwright": main})
 }
 
@@ -25,6 +34,13 @@ func call(t *testing.T, args ...string) (code int, stdout, stderr string) {
 	var out, errOut bytes.Buffer
 	code = run(context.Background(), args, strings.NewReader(""), &out, &errOut)
 	return code, out.String(), errOut.String()
+}
+
+// programProcess is the program as a process of its own.
+func programProcess(args ...string) *exec.Cmd {
+	cmd := exec.Command(os.Args[0], args...)
+	cmd.Env = append(os.Environ(), asProgram+"=1")
+	return cmd
 }
 
 // assertEmpty fails if the folder holds anything.
