@@ -90,7 +90,7 @@ func placeholderValue(name, form string, row int, r request) string {
 	case "module":
 		if !r.given(name) {
 			// A table may hold both systems; the module is defined in each.
-			j := gearJob{}
+			j := partJob{}
 			if newReader(r).size(&j); j.spec.Module > 0 {
 				const digits = 6
 				return strconv.FormatFloat(j.spec.Module, 'g', digits, 64)
@@ -104,7 +104,7 @@ func placeholderValue(name, form string, row int, r request) string {
 // its suffix; "0" for a number that is not given, nothing for a word.
 func nameText(r request, name string) string {
 	reader := newReader(r)
-	var j gearJob
+	var j partJob
 	reader.size(&j)
 	values := r.values[name]
 	if len(values) == 0 {

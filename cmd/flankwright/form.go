@@ -11,14 +11,17 @@ type form struct {
 type job interface {
 	// normalized is the request as the sidecar keeps it.
 	normalized() map[string]any
-	make() (*gearMade, error)
+	make() (*partMade, error)
 }
 
 // forms are the kinds of part that there are.
 func forms() []form {
-	return []form{
-		{"gear", gearParameters, func(r request) (job, error) { return resolveGear(r) }},
+	resolve := func(r request) (job, error) { return resolvePart(r) }
+	var list []form
+	for _, name := range []string{"gear"} {
+		list = append(list, form{name, func() []parameter { return partParameters(name) }, resolve})
 	}
+	return list
 }
 
 // formNames are the names of all forms.

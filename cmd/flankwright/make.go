@@ -15,8 +15,8 @@ import (
 	"flankwright/profile/label"
 )
 
-// gearMade is a gear ready to be written or reported.
-type gearMade struct {
+// partMade is a gear ready to be written or reported.
+type partMade struct {
 	gear     export.Gear
 	body     *body.Body
 	kerf     *sidecar.KerfReport
@@ -30,9 +30,9 @@ type gearMade struct {
 
 // maker collects what the geometry refuses and warns of while a gear is made.
 type maker struct {
-	job      gearJob
+	job      partJob
 	tooth    *profile.Tooth
-	made     *gearMade
+	made     *partMade
 	refused  profile.Violations
 	warnings []profile.Finding
 }
@@ -47,15 +47,15 @@ func (m *maker) refuse(err error) error {
 	return nil
 }
 
-// makeGear solves, fits and lays out. Everything the geometry refuses is reported
+// makePart solves, fits and lays out. Everything the geometry refuses is reported
 // together, as far as it can be judged.
-func makeGear(j gearJob) (*gearMade, error) {
+func makePart(j partJob) (*partMade, error) {
 	show := sidecar.Show(j.unit)
 	tooth, err := profile.Solve(j.spec)
 	if err != nil {
 		return nil, fromFindings(err, show)
 	}
-	m := &maker{job: j, tooth: tooth, made: &gearMade{dxf: j.dxf}, warnings: tooth.Warnings}
+	m := &maker{job: j, tooth: tooth, made: &partMade{dxf: j.dxf}, warnings: tooth.Warnings}
 	m.made.gear = export.Gear{Tooth: tooth, Fit: j.fit, Unit: j.unit, Turn: j.turn, Extent: j.extent, Reference: j.reference,
 		Cut: export.Cut{LeadIn: j.leadIn, Tabs: j.tabs, TabWidth: j.tabWidth}}
 	for _, step := range []func() error{m.makeBody, m.makeOutline, m.makeLabel} {

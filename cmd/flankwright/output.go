@@ -90,7 +90,7 @@ func (o output) sidecar() string {
 }
 
 // deliver writes the files, if any, and prints what was asked for.
-func (o output) deliver(ctx context.Context, io streams, m *gearMade) error {
+func (o output) deliver(ctx context.Context, io streams, m *partMade) error {
 	set, err := o.render(m)
 	if err != nil {
 		return err
@@ -121,7 +121,7 @@ func (o output) deliver(ctx context.Context, io streams, m *gearMade) error {
 }
 
 // render makes the bytes of each drawing and enters them in the sidecar.
-func (o output) render(m *gearMade) ([]files.File, error) {
+func (o output) render(m *partMade) ([]files.File, error) {
 	var set []files.File
 	for _, path := range o.paths {
 		data, err := m.marshal(formatOf(path))
@@ -140,7 +140,7 @@ func (o output) render(m *gearMade) ([]files.File, error) {
 }
 
 // marshal writes the drawing in the format.
-func (m *gearMade) marshal(format string) ([]byte, error) {
+func (m *partMade) marshal(format string) ([]byte, error) {
 	if format == "svg" {
 		return svg.Marshal(m.drawing, svg.Options{})
 	}
@@ -148,7 +148,7 @@ func (m *gearMade) marshal(format string) ([]byte, error) {
 }
 
 // printFiles reports what was written, with the size to check after import.
-func (o output) printFiles(io streams, m *gearMade, set []files.File) error {
+func (o output) printFiles(io streams, m *partMade, set []files.File) error {
 	var b strings.Builder
 	fmt.Fprintln(&b, m.title())
 	for _, f := range set {

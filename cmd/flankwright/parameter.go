@@ -2,6 +2,8 @@ package main
 
 import (
 	"fmt"
+	"slices"
+	"strings"
 
 	"github.com/spf13/cobra"
 	"github.com/spf13/pflag"
@@ -28,12 +30,20 @@ type parameter struct {
 	value      string // placeholder in the help; "" makes it a switch
 	usage      string
 	repeatable bool
-	transient  bool // says where results go, not what is made: not in a sidecar
+	forms      string // that have it, "" for all
+	transient  bool   // says where results go, not what is made: not in a sidecar
 	choices    []string
 }
 
-// gearParameters are the flags of an external gear.
-func gearParameters() []parameter {
+// partParameters are the flags of one form of part.
+func partParameters(form string) []parameter {
+	return slices.DeleteFunc(allParameters(), func(p parameter) bool {
+		return p.forms != "" && !slices.Contains(strings.Fields(p.forms), form)
+	})
+}
+
+// allParameters are the flags of all forms.
+func allParameters() []parameter {
 	return []parameter{
 		{name: "module", group: groupSize, value: "L", usage: "module m; makes bare lengths mm"},
 		{name: "diametral-pitch", group: groupSize, value: "P", usage: "teeth per inch of reference diameter; makes bare lengths inch"},
@@ -48,22 +58,22 @@ func gearParameters() []parameter {
 		{name: "profile-shift", group: groupForm, value: "X", usage: "coefficient x, positive thickens the tooth (default 0)"},
 		{name: "thinning", group: groupForm, value: "L", usage: "takes so much off the tooth thickness on the reference circle (default 0)"},
 		{name: "thinning-by", group: groupForm, value: "WAY", usage: "flank keeps the root circle, infeed deepens it (default flank)", choices: []string{"flank", "infeed"}},
-		{name: "tip-diameter", group: groupForm, value: "L", usage: "in place of the one that follows from rack and shift"},
+		{name: "tip-diameter", forms: "gear ring", group: groupForm, value: "L", usage: "in place of the one that follows from rack and shift"},
 		{name: "tip-shortening", group: groupForm, value: "C", usage: "takes so much off the tip radius (default 0)"},
 		{name: "tip-radius", group: groupForm, value: "L", usage: "rounds the tip corners"},
 		{name: "tip-chamfer", group: groupForm, value: "L", usage: "breaks the tip corners, so far along flank and tip circle"},
 		{name: "min-tip-thickness", group: groupForm, value: "C", usage: "lowers the tip where needed to keep so much thickness"},
 
-		{name: "bore", group: groupBody, value: "L", usage: "diameter of a round bore"},
-		{name: "keyway", group: groupBody, value: "KEY", usage: "iso, ansi (the size for the bore) or WxD, width x depth from the bore's crown; on +Y", choices: []string{"iso", "ansi"}},
-		{name: "bore-flat", group: groupBody, value: "L", usage: "gives the bore a flat on +Y; L is the depth from the flat across the bore"},
-		{name: "bore-hex", group: groupBody, value: "L", usage: "hexagon bore, across flats"},
-		{name: "hole-circle", group: groupBody, value: "NxD@BCD", usage: "N holes of diameter D on bolt circle BCD, the first on +Y; repeatable", repeatable: true},
-		{name: "windows", group: groupBody, value: "N", usage: "N lightening windows between arms, an arm on +Y"},
-		{name: "rim-width", group: groupBody, value: "L", usage: "between windows and root circle (default 1.2 whole depths)"},
-		{name: "hub-diameter", group: groupBody, value: "L", usage: "of the hub inside the windows (default from the bore)"},
-		{name: "arm-width", group: groupBody, value: "L", usage: "of the arms between windows (default from the rim)"},
-		{name: "window-radius", group: groupBody, value: "L", usage: "of the windows' corners (default from their size)"},
+		{name: "bore", forms: "gear", group: groupBody, value: "L", usage: "diameter of a round bore"},
+		{name: "keyway", forms: "gear", group: groupBody, value: "KEY", usage: "iso, ansi (the size for the bore) or WxD, width x depth from the bore's crown; on +Y", choices: []string{"iso", "ansi"}},
+		{name: "bore-flat", forms: "gear", group: groupBody, value: "L", usage: "gives the bore a flat on +Y; L is the depth from the flat across the bore"},
+		{name: "bore-hex", forms: "gear", group: groupBody, value: "L", usage: "hexagon bore, across flats"},
+		{name: "hole-circle", forms: "gear ring", group: groupBody, value: "NxD@BCD", usage: "N holes of diameter D on bolt circle BCD, the first on +Y; repeatable", repeatable: true},
+		{name: "windows", forms: "gear", group: groupBody, value: "N", usage: "N lightening windows between arms, an arm on +Y"},
+		{name: "rim-width", forms: "gear", group: groupBody, value: "L", usage: "between windows and root circle (default 1.2 whole depths)"},
+		{name: "hub-diameter", forms: "gear", group: groupBody, value: "L", usage: "of the hub inside the windows (default from the bore)"},
+		{name: "arm-width", forms: "gear", group: groupBody, value: "L", usage: "of the arms between windows (default from the rim)"},
+		{name: "window-radius", forms: "gear", group: groupBody, value: "L", usage: "of the windows' corners (default from their size)"},
 		{name: "min-feature", group: groupBody, value: "L", usage: "warns where a radius, web, gap or land is finer"},
 
 		{name: "curves", group: groupDrawing, value: "KIND", usage: "arcs, cubics or lines (default arcs)", choices: []string{"arcs", "cubics", "lines"}},

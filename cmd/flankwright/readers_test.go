@@ -62,21 +62,21 @@ func TestReadersTakeRealGears(t *testing.T) {
 }
 
 // makeFor makes the gear a command line asks for, in this process.
-func makeFor(t *testing.T, args []string) *gearMade {
+func makeFor(t *testing.T, args []string) *partMade {
 	t.Helper()
 	cmd := newGear(streams{})
 	flags := map[string]*text{}
-	for _, p := range gearParameters() {
+	for _, p := range partParameters("gear") {
 		flags[p.name] = cmd.Flags().Lookup(p.name).Value.(*text)
 	}
 	if err := cmd.ParseFlags(args); err != nil {
 		t.Fatal(err)
 	}
-	job, err := resolveGear(newRequest("gear", flags))
+	job, err := resolvePart(newRequest("gear", flags))
 	if err != nil {
 		t.Fatal(err)
 	}
-	made, err := makeGear(job)
+	made, err := makePart(job)
 	if err != nil {
 		t.Fatal(err)
 	}

@@ -86,7 +86,7 @@ func FuzzParseSidecar(f *testing.F) {
 	f.Add([]byte(`{"schema":"flankwright/sidecar/v1","input":{"command":"gear","module":["1","2"]}}`))
 	f.Add([]byte(`{"schema":"x"}`))
 	f.Add([]byte(`[]`))
-	params := gearParameters()
+	params := partParameters("gear")
 	f.Fuzz(func(t *testing.T, data []byte) {
 		r, err := parseSidecar(data, "gear", params)
 		if err != nil {
@@ -97,7 +97,7 @@ func FuzzParseSidecar(f *testing.F) {
 				t.Fatalf("flag %s without a value", name)
 			}
 		}
-		_, _ = resolveGear(r)
+		_, _ = resolvePart(r)
 	})
 }
 
@@ -143,15 +143,15 @@ func TestFromTakesItsOwnInput(t *testing.T) {
 	if code != exitDone {
 		t.Fatal(stderr)
 	}
-	r, err := parseSidecar([]byte(first), "gear", gearParameters())
+	r, err := parseSidecar([]byte(first), "gear", partParameters("gear"))
 	if err != nil {
 		t.Fatal(err)
 	}
-	job, err := resolveGear(r)
+	job, err := resolvePart(r)
 	if err != nil {
 		t.Fatal(err)
 	}
-	made, err := makeGear(job)
+	made, err := makePart(job)
 	if err != nil {
 		t.Fatal(err)
 	}

@@ -17,8 +17,8 @@ import (
 // what a laser or wire repeats, and still few entities.
 const defaultTolerance = 0.001
 
-// gearJob is a request put into numbers.
-type gearJob struct {
+// partJob is a request put into numbers.
+type partJob struct {
 	spec      profile.Spec
 	body      body.Spec
 	rack      sidecar.Rack
@@ -38,14 +38,14 @@ type gearJob struct {
 	input       map[string]any
 }
 
-func (j gearJob) normalized() map[string]any { return j.input }
-func (j gearJob) make() (*gearMade, error)   { return makeGear(j) }
+func (j partJob) normalized() map[string]any { return j.input }
+func (j partJob) make() (*partMade, error)   { return makePart(j) }
 
-// resolveGear reads a request for a gear. All that is malformed is reported
+// resolvePart reads a request for a gear. All that is malformed is reported
 // together.
-func resolveGear(req request) (gearJob, error) {
+func resolvePart(req request) (partJob, error) {
 	r := newReader(req)
-	var j gearJob
+	var j partJob
 	inch := r.size(&j)
 	r.teeth(&j)
 	r.rack(&j, inch)
@@ -55,14 +55,14 @@ func resolveGear(req request) (gearJob, error) {
 	r.cut(&j)
 	j.input = r.input
 	if r.found != nil {
-		return gearJob{}, r.found
+		return partJob{}, r.found
 	}
 	return j, nil
 }
 
 // size reads which size is given, which settles the unit of bare lengths, and says
 // whether it is in the inch system.
-func (r *reader) size(j *gearJob) (inch bool) {
+func (r *reader) size(j *partJob) (inch bool) {
 	var named []string
 	for _, name := range alternatives()[0] {
 		if r.request.given(name) {
@@ -112,7 +112,7 @@ func (r *reader) size(j *gearJob) (inch bool) {
 }
 
 // teeth reads the number of teeth, which has no default.
-func (r *reader) teeth(j *gearJob) {
+func (r *reader) teeth(j *partJob) {
 	if !r.request.given("teeth") {
 		r.found = append(r.found, problem{message: "the number of teeth is missing", hint: "give --teeth N", exit: exitMalformed})
 		return
@@ -121,7 +121,7 @@ func (r *reader) teeth(j *gearJob) {
 }
 
 // rack reads the basic rack and what is changed of it.
-func (r *reader) rack(j *gearJob, inch bool) {
+func (r *reader) rack(j *partJob, inch bool) {
 	fallback := "iso53-a"
 	if inch {
 		fallback = "full-depth-20"
@@ -164,7 +164,7 @@ func (r *reader) rack(j *gearJob, inch bool) {
 }
 
 // form reads shift, thinning and tip.
-func (r *reader) form(j *gearJob) {
+func (r *reader) form(j *partJob) {
 	s := &j.spec
 	s.ProfileShift, _ = r.number("profile-shift", "")
 	s.Thinning, _ = r.length("thinning")
@@ -190,7 +190,7 @@ func (r *reader) positive(name string) float64 {
 }
 
 // drawing reads how the gear is drawn.
-func (r *reader) drawing(j *gearJob, inch bool) {
+func (r *reader) drawing(j *partJob, inch bool) {
 	j.fit = fit.Options{Curves: fit.Arc, Tolerance: defaultTolerance}
 	switch r.choice("curves", []string{"arcs", "cubics", "lines"}, "arcs") {
 	case "cubics":
@@ -221,7 +221,7 @@ func (r *reader) drawing(j *gearJob, inch bool) {
 }
 
 // extent reads how much of the outline is drawn: a word or a number of teeth.
-func (r *reader) extent(j *gearJob) {
+func (r *reader) extent(j *partJob) {
 	s, ok := r.value("extent")
 	if !ok {
 		return

@@ -8,7 +8,7 @@ import (
 )
 
 // body reads bore, keyway, holes and windows.
-func (r *reader) body(j *gearJob) {
+func (r *reader) body(j *partJob) {
 	b := &j.body
 	b.Bore = r.positive("bore")
 	b.BoreFlat = r.positive("bore-flat")

@@ -31,7 +31,7 @@ func (r *reader) wholePart(name, whole, s, hint string) (int, bool) {
 }
 
 // cut reads the beam and the aids for it.
-func (r *reader) cut(j *gearJob) {
+func (r *reader) cut(j *partJob) {
 	j.kerf = r.positive("kerf")
 	j.leadIn = r.positive("lead-in")
 	if s, ok := r.value("tabs"); ok {

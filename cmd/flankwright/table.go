@@ -20,7 +20,7 @@ const (
 
 // printTable prints the dimension table for the workshop wall: name, symbol, value
 // in mm and in inch.
-func printTable(out io.Writer, m *gearMade) error {
+func printTable(out io.Writer, m *partMade) error {
 	var b strings.Builder
 	fmt.Fprintf(&b, "%s\n", m.title())
 	fmt.Fprintf(&b, "basic rack %s: %s\n", m.document.BasicRack["name"], m.document.BasicRack["source"])
@@ -88,7 +88,7 @@ func micrometres(mm float64) string { return profile.NumberOf(mm*1000).String() 
 
 // reportLines tell what is drawn, how the beam's path differs from the part, and what
 // was chosen.
-func (m *gearMade) reportLines() []string {
+func (m *partMade) reportLines() []string {
 	lines := []string{outlineLine(m)}
 	show := sidecar.Show(m.gear.Unit)
 	if k := m.kerf; k != nil {
@@ -109,7 +109,7 @@ func (m *gearMade) reportLines() []string {
 
 // outlineLine sums up what is drawn: entities, deviation, and the size to check
 // after import.
-func outlineLine(m *gearMade) string {
+func outlineLine(m *partMade) string {
 	for _, r := range m.drawing.Report() {
 		if r.Layer != export.LayerOutline {
 			continue

@@ -14,11 +14,11 @@ func BenchmarkGear(b *testing.B) {
 			o := output{paths: []string{"gear.dxf", "gear.svg"}}
 			b.ReportAllocs()
 			for b.Loop() {
-				job, err := resolveGear(req)
+				job, err := resolvePart(req)
 				if err != nil {
 					b.Fatal(err)
 				}
-				made, err := makeGear(job)
+				made, err := makePart(job)
 				if err != nil {
 					b.Fatal(err)
 				}

@@ -11,7 +11,7 @@ import (
 )
 
 func newGear(io streams) *cobra.Command {
-	params := gearParameters()
+	params := partParameters("gear")
 	cmd := &cobra.Command{
 		Use:   "gear",
 		Short: "An external gear",
@@ -27,14 +27,14 @@ written.
 	}
 	flags := define(cmd, params)
 	cmd.RunE = func(cmd *cobra.Command, _ []string) error {
-		return runGear(cmd.Context(), io, newRequest("gear", flags), params)
+		return runPart(cmd.Context(), io, newRequest("gear", flags), params)
 	}
 	return cmd
 }
 
-// runGear is the way of a request: defaults, numbers, exact tooth, drawn tooth,
+// runPart is the way of a request: defaults, numbers, exact tooth, drawn tooth,
 // sheet, files or table.
-func runGear(ctx context.Context, io streams, req request, params []parameter) error {
+func runPart(ctx context.Context, io streams, req request, params []parameter) error {
 	out, err := readOutput(req)
 	if err != nil {
 		return err
@@ -46,11 +46,11 @@ func runGear(ctx context.Context, io streams, req request, params []parameter) e
 		}
 		req = req.withDefaults(defaults)
 	}
-	job, err := resolveGear(req)
+	job, err := resolvePart(req)
 	if err != nil {
 		return err
 	}
-	made, err := makeGear(job)
+	made, err := makePart(job)
 	if err != nil {
 		return err
 	}
@@ -58,7 +58,7 @@ func runGear(ctx context.Context, io streams, req request, params []parameter) e
 }
 
 // title names the gear in one line.
-func (m *gearMade) title() string {
+func (m *partMade) title() string {
 	d := m.gear.Tooth.Dimensions
 	size := "module " + profile.NumberOf(d.Module).String() + " mm"
 	if m.gear.Unit == export.Inch {
