@@ -8,7 +8,7 @@ import (
 // BenchmarkGear takes a request through solve, fit and the bytes of DXF, SVG and
 // sidecar.
 func BenchmarkGear(b *testing.B) {
-	for _, teeth := range []int{24, 200} {
+	for _, teeth := range []int{24, 66, 200} {
 		b.Run("z"+strconv.Itoa(teeth), func(b *testing.B) {
 			req := request{command: "gear", values: map[string][]string{"module": {"2"}, "teeth": {strconv.Itoa(teeth)}, "bore": {"10"}}}
 			o := output{paths: []string{"gear.dxf", "gear.svg"}}

@@ -94,29 +94,36 @@ func (s Segment) SweptArea() float64 {
 	cross := r2.Cross(s.Start, s.End) / 2
 	switch s.Kind {
 	case Arc:
-		return cross + s.arcCap()
+		if s.Bulge == 0 {
+			return cross
+		}
+		return cross + arcCap(s.Radius(), s.Included())
 	case Cubic:
 		return s.cubicArea()
 	}
 	return cross
 }
 
-// arcCap is the area between an arc and its chord, R^2 (phi - sin phi)/2, with
-// the sign of the turn. For small angles the difference is taken from its
-// series, which keeps full precision where subtraction would not.
-func (s Segment) arcCap() float64 {
-	if s.Bulge == 0 {
-		return 0
+// measure is Length and SweptArea at once.
+func (s *Segment) measure() (length, area float64) {
+	if s.Kind != Arc || s.Bulge == 0 {
+		return s.Length(), s.SweptArea()
 	}
-	phi := s.Included()
-	r := s.Radius()
+	r, phi := s.Radius(), s.Included()
+	return r * math.Abs(phi), r2.Cross(s.Start, s.End)/2 + arcCap(r, phi)
+}
+
+// arcCap is the area between an arc of radius r and its chord, r^2 (phi - sin phi)/2,
+// with the sign of the included angle phi. For small angles the difference is taken
+// from its series, which keeps full precision where subtraction would not.
+func arcCap(r, phi float64) float64 {
 	const series = 0.1 // rad; the next term is below 1e-16 of the first there
-	diff := phi - math.Sin(phi)
 	if math.Abs(phi) < series {
 		q := phi * phi
-		diff = phi * q / 6 * (1 - q/20*(1-q/42*(1-q/72*(1-q/110))))
+		diff := phi * q / 6 * (1 - q/20*(1-q/42*(1-q/72*(1-q/110))))
+		return r * r * diff / 2
 	}
-	return r * r * diff / 2
+	return r * r * (phi - math.Sin(phi)) / 2
 }
 
 // Bounds returns the least box around the segment.
