@@ -49,25 +49,49 @@ func Append(dst []byte, x float64) []byte {
 	if !(math.Abs(x) < exact) {
 		return trim(strconv.AppendFloat(dst, x, 'f', Decimals, 64))
 	}
-	n := int64(math.RoundToEven(x * perUnit))
-	if n < 0 {
-		dst = append(dst, '-')
-		n = -n
-	}
-	dst = strconv.AppendInt(dst, n/perUnit, 10)
-	frac := uint32(n % perUnit) // 32 bits divide faster
-	var digits [1 + Decimals]byte
-	digits[0] = '.'
-	for i := Decimals; i > 0; i-- {
-		digits[i] = byte('0' + frac%10)
+	steps := int64(math.RoundToEven(x * perUnit))
+	n := uint64(max(steps, -steps))
+	whole, frac := uint32(n/perUnit), uint32(n%perUnit) // 32 bits divide faster
+
+	var text [1 + 7 + 1 + Decimals]byte // sign, at most 2^53/10^9 units, point
+	const point = len(text) - Decimals - 1
+	end := point + 2
+	text[point], text[point+1] = '.', '0'
+	if frac != 0 {
+		end = len(text)
+		text[end-1] = byte('0' + frac%10)
 		frac /= 10
+		for i := end - 3; i > point; i -= 2 {
+			pair := frac % 100 * 2
+			text[i], text[i+1] = pairs[pair], pairs[pair+1]
+			frac /= 100
+		}
+		for text[end-1] == '0' {
+			end--
+		}
 	}
-	end := len(digits)
-	for end > 2 && digits[end-1] == '0' {
-		end--
+	start := point
+	for whole >= 10 {
+		pair := whole % 100 * 2
+		start -= 2
+		text[start], text[start+1] = pairs[pair], pairs[pair+1]
+		whole /= 100
 	}
-	return append(dst, digits[:end]...)
+	if whole > 0 || start == point {
+		start--
+		text[start] = byte('0' + whole)
+	}
+	if steps < 0 {
+		start--
+		text[start] = '-'
+	}
+	return append(dst, text[start:end]...)
 }
+
+// pairs are the numbers of two digits one after the other.
+const pairs = "00010203040506070809101112131415161718192021222324252627282930313233343536373839" +
+	"40414243444546474849505152535455565758596061626364656667686970717273747576777879" +
+	"8081828384858687888990919293949596979899"
 
 // AppendDecimals appends x in fixed point with at most the given number of
 // decimals, at least one. It serves the angles of DXF arcs, which need more

@@ -216,8 +216,11 @@ func ValidLayer(l export.Layer) bool {
 // sagitta |b| c / 2 is below half a step of the last decimal, so that no digit
 // of the file could tell the two apart.
 func Straight(s fit.Segment) bool {
-	return s.Kind == fit.Line || s.Kind == fit.Arc && math.Abs(s.Bulge)*s.Chord() < fixed.Step
+	return s.Kind == fit.Line || s.Kind == fit.Arc && Flat(s.Bulge, s.Chord())
 }
+
+// Flat says the same of an arc by its bulge and chord.
+func Flat(bulge, chord float64) bool { return math.Abs(bulge)*chord < fixed.Step }
 
 // Has reports whether the path holds a segment of kind k.
 func Has(p *fit.Path, k fit.Kind) bool {

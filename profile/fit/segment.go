@@ -42,16 +42,20 @@ func ArcTo(a, b r2.Vec, bulge float64) Segment {
 // Chord is the distance from Start to End.
 func (s Segment) Chord() float64 { return r2.Norm(r2.Sub(s.End, s.Start)) }
 
-// Radius is the radius of an Arc, with c the chord and b the bulge:
-//
-//	R = c (1 + b^2) / (4 |b|)
-//
-// It is +Inf for a straight segment.
+// Radius is the radius of an Arc, ArcRadius of its chord and bulge. It is +Inf for a
+// straight segment.
 func (s Segment) Radius() float64 {
 	if s.Kind != Arc || s.Bulge == 0 {
 		return math.Inf(1)
 	}
-	return s.Chord() * (1 + s.Bulge*s.Bulge) / (4 * math.Abs(s.Bulge))
+	return ArcRadius(s.Chord(), s.Bulge)
+}
+
+// ArcRadius is the radius in mm of an arc of chord c in mm and bulge b other than 0:
+//
+//	R = c (1 + b^2) / (4 |b|)
+func ArcRadius(chord, bulge float64) float64 {
+	return chord * (1 + bulge*bulge) / (4 * math.Abs(bulge))
 }
 
 // Included is the signed angle an Arc turns through, 4 atan(bulge); 0 for the
