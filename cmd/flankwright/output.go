@@ -124,16 +124,18 @@ func (o output) deliver(ctx context.Context, io streams, m *gearMade) error {
 
 // render makes the bytes of each drawing and enters them in the sidecar.
 func (o output) render(m *gearMade) ([]files.File, error) {
+	if len(o.paths) == 0 {
+		return nil, nil
+	}
+	drawn, err := sheet.New(m.drawing)
+	if err != nil {
+		return nil, drawingFailed(o.paths[0], err)
+	}
 	var set []files.File
 	for _, path := range o.paths {
-		data, err := m.marshal(formatOf(path))
+		data, err := m.write(drawn, formatOf(path))
 		if err != nil {
-			p := problem{flag: "output", value: path, message: err.Error(), exit: exitGeometry}
-			var failure *sheet.Error
-			if errors.As(err, &failure) && failure.Rule == sheet.RulePrecision {
-				p.hint = "draw so large a part with --curves arcs and without --loose"
-			}
-			return nil, problems{p}
+			return nil, drawingFailed(path, err)
 		}
 		set = append(set, files.File{Name: path, Data: data})
 		sum := sha256.Sum256(data)
@@ -143,12 +145,22 @@ func (o output) render(m *gearMade) ([]files.File, error) {
 	return set, nil
 }
 
-// marshal writes the drawing in the format.
-func (m *gearMade) marshal(format string) ([]byte, error) {
-	if format == "svg" {
-		return svg.Marshal(m.drawing, svg.Options{})
+// drawingFailed says why a drawing cannot be written.
+func drawingFailed(path string, err error) error {
+	p := problem{flag: "output", value: path, message: err.Error(), exit: exitGeometry}
+	var failure *sheet.Error
+	if errors.As(err, &failure) && failure.Rule == sheet.RulePrecision {
+		p.hint = "draw so large a part with --curves arcs and without --loose"
 	}
-	return dxf.Marshal(m.drawing, m.dxf)
+	return problems{p}
+}
+
+// write writes the sheet in the format.
+func (m *gearMade) write(s *sheet.Sheet, format string) ([]byte, error) {
+	if format == "svg" {
+		return svg.AppendSheet(nil, s, svg.Options{})
+	}
+	return dxf.AppendSheet(nil, s, m.dxf)
 }
 
 // printFiles reports what was written, with the size to check after import.

@@ -6,7 +6,10 @@
 package fixed
 
 import (
+	"encoding/binary"
 	"math"
+	"math/bits"
+	"slices"
 	"strconv"
 )
 
@@ -53,45 +56,42 @@ func Append(dst []byte, x float64) []byte {
 	n := uint64(max(steps, -steps))
 	whole, frac := uint32(n/perUnit), uint32(n%perUnit) // 32 bits divide faster
 
-	var text [1 + 7 + 1 + Decimals]byte // sign, at most 2^53/10^9 units, point
-	const point = len(text) - Decimals - 1
-	end := point + 2
-	text[point], text[point+1] = '.', '0'
-	if frac != 0 {
-		end = len(text)
-		text[end-1] = byte('0' + frac%10)
-		frac /= 10
-		for i := end - 3; i > point; i -= 2 {
-			pair := frac % 100 * 2
-			text[i], text[i+1] = pairs[pair], pairs[pair+1]
-			frac /= 100
-		}
-		for text[end-1] == '0' {
-			end--
-		}
-	}
-	start := point
-	for whole >= 10 {
-		pair := whole % 100 * 2
-		start -= 2
-		text[start], text[start+1] = pairs[pair], pairs[pair+1]
-		whole /= 100
-	}
-	if whole > 0 || start == point {
-		start--
-		text[start] = byte('0' + whole)
-	}
+	used := len(dst)
+	dst = slices.Grow(dst, longest)
+	text := (*[longest]byte)(dst[used : used+longest])
+	at := 0
 	if steps < 0 {
-		start--
-		text[start] = '-'
+		text[0] = '-'
+		at = 1
 	}
-	return append(dst, text[start:end]...)
+	digits := eight(whole)
+	leading := min(7, bits.TrailingZeros64(digits)/8) // zeros
+	binary.LittleEndian.PutUint64(text[at:], (digits|zeros)>>(8*leading))
+	at += 8 - leading
+	const eighth = 100_000_000
+	text[at], text[at+1] = '.', byte('0'+frac/eighth)
+	digits = eight(frac % eighth)
+	binary.LittleEndian.PutUint64(text[at+2:], digits|zeros)
+	trailing := bits.LeadingZeros64(digits) / 8
+	return dst[:used+at+Decimals+1-trailing]
 }
 
-// pairs are the numbers of two digits one after the other.
-const pairs = "00010203040506070809101112131415161718192021222324252627282930313233343536373839" +
-	"40414243444546474849505152535455565758596061626364656667686970717273747576777879" +
-	"8081828384858687888990919293949596979899"
+// longest is how many bytes a number takes: sign, 8 digits, point, decimals.
+const longest = 1 + 8 + 1 + Decimals
+
+// zeros is the text of eight digits 0.
+const zeros = 0x3030303030303030
+
+// eight returns the eight decimal digits of n below 10^8, one a byte, the first in
+// the lowest. All digits are parted at once: a number in a lane is halved into two
+// lanes by its quotient and remainder, the quotient as a product and a shift.
+func eight(n uint32) uint64 {
+	v := uint64(n/10_000) | uint64(n%10_000)<<32
+	q := v * 10_486 >> 20 & 0x0000_007f_0000_007f // by 100
+	v = q | (v-100*q)<<16
+	q = v * 103 >> 10 & 0x000f_000f_000f_000f // by 10
+	return q | (v-10*q)<<8
+}
 
 // AppendDecimals appends x in fixed point with at most the given number of
 // decimals, at least one. It serves the angles of DXF arcs, which need more
