@@ -93,7 +93,7 @@ func (o output) sidecar() string {
 
 // deliver writes the files, if any, and prints what was asked for.
 func (o output) deliver(ctx context.Context, io streams, m *gearMade) error {
-	set, err := o.render(m)
+	set, err := o.render(m, new(pages))
 	if err != nil {
 		return err
 	}
@@ -122,21 +122,22 @@ func (o output) deliver(ctx context.Context, io streams, m *gearMade) error {
 	return o.printFiles(io, m, set)
 }
 
-// render makes the bytes of each drawing and enters them in the sidecar.
-func (o output) render(m *gearMade) ([]files.File, error) {
+// render makes the bytes of each drawing, in the memory of p, and enters them in the
+// sidecar.
+func (o output) render(m *gearMade, p *pages) ([]files.File, error) {
 	if len(o.paths) == 0 {
 		return nil, nil
 	}
-	drawn, err := sheet.New(m.drawing)
-	if err != nil {
+	if err := p.sheet.Set(m.drawing); err != nil {
 		return nil, drawingFailed(o.paths[0], err)
 	}
 	var set []files.File
-	for _, path := range o.paths {
-		data, err := m.write(drawn, formatOf(path))
+	for i, path := range o.paths {
+		data, err := m.write((*p.drawing(i))[:0], &p.sheet, formatOf(path))
 		if err != nil {
 			return nil, drawingFailed(path, err)
 		}
+		*p.drawing(i) = data
 		set = append(set, files.File{Name: path, Data: data})
 		sum := sha256.Sum256(data)
 		m.document.Files = append(m.document.Files, sidecar.File{Name: filepath.Base(path), Format: formatOf(path),
@@ -155,12 +156,12 @@ func drawingFailed(path string, err error) error {
 	return problems{p}
 }
 
-// write writes the sheet in the format.
-func (m *gearMade) write(s *sheet.Sheet, format string) ([]byte, error) {
+// write appends the sheet in the format.
+func (m *gearMade) write(dst []byte, s *sheet.Sheet, format string) ([]byte, error) {
 	if format == "svg" {
-		return svg.AppendSheet(nil, s, svg.Options{})
+		return svg.AppendSheet(dst, s, svg.Options{})
 	}
-	return dxf.AppendSheet(nil, s, m.dxf)
+	return dxf.AppendSheet(dst, s, m.dxf)
 }
 
 // printFiles reports what was written, with the size to check after import.

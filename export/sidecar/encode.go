@@ -49,6 +49,7 @@ func newForm(t reflect.Type) *form {
 	if t.Kind() != reflect.Struct {
 		return f
 	}
+	f.fields = make([]field, 0, t.NumField())
 	for i := range t.NumField() {
 		part := t.Field(i)
 		name, option, _ := strings.Cut(part.Tag.Get("json"), ",")
@@ -70,7 +71,10 @@ func (e *encoder) value(v reflect.Value) error {
 	case reflect.Interface:
 		return e.value(v.Elem())
 	}
-	if v.Type() == reflect.TypeFor[Decimal]() {
+	switch v.Type() {
+	case reflect.TypeFor[string]():
+		return e.text(v.String())
+	case reflect.TypeFor[Decimal]():
 		var err error
 		e.buf, err = Decimal(v.Float()).append(e.buf)
 		return err
