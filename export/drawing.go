@@ -4,8 +4,6 @@
 package export
 
 import (
-	"math"
-
 	"gonum.org/v1/gonum/spatial/r2"
 
 	"flankwright/profile/fit"
@@ -96,8 +94,7 @@ type Drawing struct {
 
 // Bounds returns the least box around all items.
 func (d Drawing) Bounds() r2.Box {
-	inf := math.Inf(1)
-	box := r2.Box{Min: r2.Vec{X: inf, Y: inf}, Max: r2.Vec{X: -inf, Y: -inf}}
+	box := nowhere()
 	for _, it := range d.Items {
 		box = union(box, it.Bounds())
 	}

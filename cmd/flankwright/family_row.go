@@ -9,6 +9,7 @@ import (
 	"errors"
 	"io"
 	"path/filepath"
+	"sync"
 
 	"flankwright/export/files"
 	"flankwright/export/sidecar"
@@ -18,13 +19,19 @@ import (
 type rowWriter struct {
 	*family
 	folder *files.Folder
-	gate   *gate // nil unless the first bad row ends the run
+	gate   *gate     // nil unless the first bad row ends the run
+	memory sync.Pool // of *pages
 }
 
 // make makes one row.
 func (w *rowWriter) make(ctx context.Context, row tableRow) rowResult {
 	r := rowResult{row: row}
-	made, err := w.prepare(&r)
+	memory, ok := w.memory.Get().(*pages)
+	if !ok {
+		memory = new(pages)
+	}
+	defer w.memory.Put(memory)
+	made, err := w.prepare(&r, memory)
 	if err != nil {
 		var found problems
 		if !errors.As(err, &found) {
@@ -42,7 +49,7 @@ func (w *rowWriter) make(ctx context.Context, row tableRow) rowResult {
 	if r.stopped || r.found != nil || r.skipped {
 		return r
 	}
-	r.listed, err = w.write(ctx, row, made)
+	r.listed, err = w.write(ctx, row, made, memory)
 	switch {
 	case err != nil && ctx.Err() != nil:
 		r.stopped = true
@@ -53,7 +60,7 @@ func (w *rowWriter) make(ctx context.Context, row tableRow) rowResult {
 }
 
 // prepare makes the drawing of a row, unless it is there already.
-func (w *rowWriter) prepare(r *rowResult) (*rendered, error) {
+func (w *rowWriter) prepare(r *rowResult, memory *pages) (*rendered, error) {
 	if r.row.found != nil {
 		return nil, r.row.found
 	}
@@ -74,7 +81,7 @@ func (w *rowWriter) prepare(r *rowResult) (*rendered, error) {
 	for _, format := range w.formats {
 		o.paths = append(o.paths, r.row.name+"."+format)
 	}
-	set, err := o.render(made)
+	set, err := o.render(made, memory)
 	if err != nil {
 		return nil, err
 	}
@@ -88,11 +95,12 @@ type rendered struct {
 }
 
 // write writes the files of a row.
-func (w *rowWriter) write(ctx context.Context, row tableRow, made *rendered) (sidecar.FamilyRow, error) {
-	text, err := made.document.Marshal()
+func (w *rowWriter) write(ctx context.Context, row tableRow, made *rendered, memory *pages) (sidecar.FamilyRow, error) {
+	text, err := made.document.Append(memory.sidecar[:0])
 	if err != nil {
 		return sidecar.FamilyRow{}, err
 	}
+	memory.sidecar = text
 	own := files.File{Name: row.name + ".json", Data: text}
 	if err := w.folder.WriteSet(ctx, append(made.set, own)...); err != nil {
 		return sidecar.FamilyRow{}, err

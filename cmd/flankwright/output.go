@@ -91,7 +91,7 @@ func (o output) sidecar() string {
 
 // deliver writes the files, if any, and prints what was asked for.
 func (o output) deliver(ctx context.Context, io streams, m *partMade) error {
-	set, err := o.render(m)
+	set, err := o.render(m, new(pages))
 	if err != nil {
 		return err
 	}
@@ -120,31 +120,44 @@ func (o output) deliver(ctx context.Context, io streams, m *partMade) error {
 	return o.printFiles(io, m, set)
 }
 
-// render makes the bytes of each drawing and enters them in the sidecar.
-func (o output) render(m *partMade) ([]files.File, error) {
+// render makes the bytes of each drawing, in the memory of p, and enters them in the
+// sidecar.
+func (o output) render(m *partMade, p *pages) ([]files.File, error) {
+	if len(o.paths) == 0 {
+		return nil, nil
+	}
+	if err := p.sheet.Set(m.drawing); err != nil {
+		return nil, drawingFailed(o.paths[0], err)
+	}
 	var set []files.File
-	for _, path := range o.paths {
-		data, err := m.marshal(formatOf(path))
+	for i, path := range o.paths {
+		data, err := m.write((*p.drawing(i))[:0], &p.sheet, formatOf(path))
 		if err != nil {
-			p := problem{flag: "output", value: path, message: err.Error(), exit: exitGeometry}
-			var failure *sheet.Error
-			if errors.As(err, &failure) && failure.Rule == sheet.RulePrecision {
-				p.hint = "draw so large a part with --curves arcs and without --loose"
-			}
-			return nil, problems{p}
+			return nil, drawingFailed(path, err)
 		}
+		*p.drawing(i) = data
 		set = append(set, files.File{Name: path, Data: data})
 		m.document.Files = append(m.document.Files, described(files.File{Name: path, Data: data}))
 	}
 	return set, nil
 }
 
-// marshal writes the drawing in the format.
-func (m *partMade) marshal(format string) ([]byte, error) {
-	if format == "svg" {
-		return svg.Marshal(m.drawing, svg.Options{})
+// drawingFailed says why a drawing cannot be written.
+func drawingFailed(path string, err error) error {
+	p := problem{flag: "output", value: path, message: err.Error(), exit: exitGeometry}
+	var failure *sheet.Error
+	if errors.As(err, &failure) && failure.Rule == sheet.RulePrecision {
+		p.hint = "draw so large a part with --curves arcs and without --loose"
 	}
-	return dxf.Marshal(m.drawing, m.dxf)
+	return problems{p}
+}
+
+// write appends the sheet in the format.
+func (m *partMade) write(dst []byte, s *sheet.Sheet, format string) ([]byte, error) {
+	if format == "svg" {
+		return svg.AppendSheet(dst, s, svg.Options{})
+	}
+	return dxf.AppendSheet(dst, s, m.dxf)
 }
 
 // printFiles reports what was written, with the size to check after import.

@@ -64,10 +64,10 @@ func (bs *blocks) SetHandle(next *int) {
 }
 
 // Format writes the section.
-func (bs *blocks) Format(f format.Formatter) {
-	section(f, "BLOCKS", func() {
+func (bs *blocks) Format(e *encoder) {
+	e.section("BLOCKS", func() {
 		for i := range bs {
-			bs[i].Format(f)
+			bs[i].Format(e)
 		}
 	})
 }

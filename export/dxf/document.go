@@ -9,7 +9,7 @@ import (
 
 // document is one file: sections in file order, each with its handles.
 type document struct {
-	sections []formatter
+	sections []section
 }
 
 // newDocument lays the file out and hands out handles in file order, so that
@@ -24,7 +24,7 @@ func newDocument(s *sheet.Sheet, opt Options) *document {
 	}
 	ents.layers = t.layers
 	if opt.Version == R12 {
-		return &document{sections: []formatter{
+		return &document{sections: []section{
 			&header{sheet: s, version: R12}, t, emptySection("BLOCKS"), ents,
 		}}
 	}
@@ -34,32 +34,37 @@ func newDocument(s *sheet.Sheet, opt Options) *document {
 	blks.SetHandle(&next)
 	ents.SetHandle(&next)
 	objs.SetHandle(&next)
-	return &document{sections: []formatter{
+	return &document{sections: []section{
 		&header{sheet: s, version: R2000, handseed: next}, classes{}, t, blks, ents, objs,
 	}}
 }
 
 // Format writes the whole file.
-func (d *document) Format(f format.Formatter) {
+func (d *document) Format(e *encoder) {
 	for _, s := range d.sections {
-		s.Format(f)
+		s.Format(e)
 	}
-	f.WriteString(0, "EOF")
+	e.WriteString(0, "EOF")
+}
+
+// section is a section of a file.
+type section interface {
+	Format(*encoder)
 }
 
 // section writes a section around body.
-func section(f format.Formatter, name string, body func()) {
-	f.WriteString(0, "SECTION")
-	f.WriteString(2, name)
+func (e *encoder) section(name string, body func()) {
+	e.WriteString(0, "SECTION")
+	e.WriteString(2, name)
 	body()
-	f.WriteString(0, "ENDSEC")
+	e.WriteString(0, "ENDSEC")
 }
 
 // emptySection is a section that must be there but holds nothing.
 type emptySection string
 
 // Format writes the section.
-func (s emptySection) Format(f format.Formatter) { section(f, string(s), func() {}) }
+func (s emptySection) Format(e *encoder) { e.section(string(s), func() {}) }
 
 // node is the handle of a record, and its owner's.
 type node struct {

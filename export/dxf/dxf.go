@@ -2,6 +2,7 @@ package dxf
 
 import (
 	"fmt"
+	"slices"
 
 	"github.com/yofu/dxf/format"
 
@@ -61,17 +62,22 @@ func Marshal(d export.Drawing, opt Options) ([]byte, error) {
 // Append appends the file to dst, which may be a buffer kept from an earlier
 // call. On error it returns dst as it was.
 func Append(dst []byte, d export.Drawing, opt Options) ([]byte, error) {
-	if opt.Version > R12 {
-		return dst, &sheet.Error{Rule: sheet.RuleOptions, Item: -1, Segment: -1, Detail: opt.Version.String()}
-	}
 	s, err := sheet.New(d)
 	if err != nil {
 		return dst, err
 	}
+	return AppendSheet(dst, s, opt)
+}
+
+// AppendSheet does the same for a drawing that is a sheet already.
+func AppendSheet(dst []byte, s *sheet.Sheet, opt Options) ([]byte, error) {
+	if opt.Version > R12 {
+		return dst, &sheet.Error{Rule: sheet.RuleOptions, Item: -1, Segment: -1, Detail: opt.Version.String()}
+	}
 	if err := expressible(s, opt); err != nil {
 		return dst, err
 	}
-	e := &encoder{buf: grow(dst, sizeEstimate(s, opt)), r12: opt.Version == R12}
+	e := &encoder{buf: slices.Grow(dst, sizeEstimate(s, opt)), r12: opt.Version == R12}
 	doc := newDocument(s, opt)
 	doc.Format(e)
 	if e.err != nil {
@@ -86,12 +92,13 @@ func expressible(s *sheet.Sheet, opt Options) error {
 		if it.Path == nil || !single(it.Path, opt) {
 			continue
 		}
-		for j, seg := range it.Path.Segments {
+		for j := range it.Path.Segments {
+			seg := &it.Path.Segments[j]
 			rule := sheet.Rule("")
 			switch {
 			case seg.Kind == fit.Cubic && opt.Version == R12:
 				rule = sheet.RuleVersion
-			case seg.Kind == fit.Arc && !sheet.Straight(seg) && seg.Radius() > maxArcRadius:
+			case seg.Kind == fit.Arc && seg.Radius() > maxArcRadius && !sheet.Straight(*seg):
 				rule = sheet.RulePrecision
 			default:
 				continue
@@ -129,16 +136,6 @@ func sizeEstimate(s *sheet.Sheet, opt Options) int {
 		}
 	}
 	return n
-}
-
-// grow returns dst with room for n more bytes.
-func grow(dst []byte, n int) []byte {
-	if cap(dst)-len(dst) >= n {
-		return dst
-	}
-	out := make([]byte, len(dst), len(dst)+n)
-	copy(out, dst)
-	return out
 }
 
 // formatter is what every part of a document can do.

@@ -7,6 +7,7 @@ import (
 	"strconv"
 
 	"github.com/yofu/dxf/format"
+	"gonum.org/v1/gonum/spatial/r2"
 
 	"flankwright/export/fixed"
 )
@@ -95,8 +96,7 @@ func (e *encoder) code(code int) bool {
 	if e.r12 && newerThanR12(code) {
 		return false
 	}
-	e.buf = strconv.AppendInt(e.buf, int64(code), 10)
-	e.buf = append(e.buf, '\n')
+	e.buf = append(strconv.AppendInt(e.buf, int64(code), 10), '\n')
 	return true
 }
 
@@ -150,6 +150,17 @@ func (e *encoder) WriteFloat(code int, val float64) {
 		e.buf = fixed.AppendDecimals(e.buf, val, angleDecimals)
 	} else {
 		e.buf = fixed.Append(e.buf, val)
+	}
+	e.buf = append(e.buf, '\n')
+}
+
+// vertex writes the groups of a polyline's vertex at once, the bulge if asked for.
+// The numbers are a sheet's, hence finite.
+func (e *encoder) vertex(at r2.Vec, bulge float64, curved bool) {
+	e.buf = fixed.Append(append(e.buf, "10\n"...), at.X)
+	e.buf = fixed.Append(append(e.buf, "\n20\n"...), at.Y)
+	if curved {
+		e.buf = fixed.Append(append(e.buf, "\n42\n"...), bulge)
 	}
 	e.buf = append(e.buf, '\n')
 }

@@ -2,7 +2,6 @@ package dxf
 
 import (
 	"github.com/yofu/dxf/entity"
-	"github.com/yofu/dxf/format"
 	"github.com/yofu/dxf/table"
 
 	"flankwright/export"
@@ -33,9 +32,9 @@ func (es *entities) SetHandle(next *int) {
 }
 
 // Format writes the section.
-func (es *entities) Format(f format.Formatter) {
-	w := newEntityWriter(f, es)
-	section(f, "ENTITIES", func() {
+func (es *entities) Format(e *encoder) {
+	w := newEntityWriter(e, es)
+	e.section("ENTITIES", func() {
 		for _, it := range es.sheet.Items {
 			layer := es.layers[it.Layer]
 			switch {
@@ -47,10 +46,10 @@ func (es *entities) Format(f format.Formatter) {
 				}
 			case es.opt.Version == R12:
 				w.polyline.set(w, layer, it.Path)
-				polylineR12{&w.polyline}.Format(f)
+				w.polyline.formatR12(e)
 			default:
 				w.polyline.set(w, layer, it.Path)
-				w.polyline.Format(f)
+				w.polyline.format(e)
 			}
 		}
 	})
@@ -65,7 +64,7 @@ type record interface {
 
 // entityWriter holds the records that are filled again and again.
 type entityWriter struct {
-	f        format.Formatter
+	encoder  *encoder
 	next     int // handle of the next entity
 	line     *entity.Line
 	arc      *entity.Arc
@@ -74,9 +73,9 @@ type entityWriter struct {
 	polyline polyline
 }
 
-func newEntityWriter(f format.Formatter, es *entities) *entityWriter {
+func newEntityWriter(e *encoder, es *entities) *entityWriter {
 	w := &entityWriter{
-		f: f, next: es.first,
+		encoder: e, next: es.first,
 		line: entity.NewLine(), arc: entity.NewArc(nil), disc: entity.NewCircle(), spline: entity.NewSpline(),
 	}
 	// In one of the Bezier pieces the knots are 0 0 0 0 1 1 1 1: clamped, no
@@ -104,7 +103,7 @@ const splineTolerance = 1e-7
 func (w *entityWriter) write(r record, l *table.Layer) {
 	r.SetHandle(&w.next)
 	r.SetLayer(l)
-	r.Format(w.f)
+	r.Format(w.encoder)
 }
 
 func (w *entityWriter) circle(l *table.Layer, c *export.Circle) {

@@ -27,47 +27,47 @@ const (
 
 // Format writes the section. R12 gets the variables it knows and no others;
 // there is none for the unit among them.
-func (h *header) Format(f format.Formatter) {
+func (h *header) Format(e *encoder) {
 	box := h.sheet.Bounds
-	section(f, "HEADER", func() {
-		f.WriteString(9, "$ACADVER")
-		f.WriteString(1, h.version.acadver())
+	e.section("HEADER", func() {
+		e.WriteString(9, "$ACADVER")
+		e.WriteString(1, h.version.acadver())
 		if h.version == R2000 {
-			f.WriteString(9, "$DWGCODEPAGE")
-			f.WriteString(3, "ANSI_1252")
+			e.WriteString(9, "$DWGCODEPAGE")
+			e.WriteString(3, "ANSI_1252")
 		}
-		variable3(f, "$INSBASE", r2.Vec{})
-		variable3(f, "$EXTMIN", box.Min)
-		variable3(f, "$EXTMAX", box.Max)
-		variable2(f, "$LIMMIN", box.Min)
-		variable2(f, "$LIMMAX", box.Max)
-		f.WriteString(9, "$LTSCALE")
-		f.WriteFloat(40, 1)
-		f.WriteString(9, "$CLAYER")
-		f.WriteString(8, layerZero)
-		f.WriteString(9, "$CELTYPE")
-		f.WriteString(6, "BYLAYER")
-		f.WriteString(9, "$CECOLOR")
-		f.WriteInt(62, 256) // by layer
-		integer(f, "$LUNITS", 2)
-		integer(f, "$LUPREC", 4)
-		integer(f, "$AUNITS", 0)
+		variable3(e, "$INSBASE", r2.Vec{})
+		variable3(e, "$EXTMIN", box.Min)
+		variable3(e, "$EXTMAX", box.Max)
+		variable2(e, "$LIMMIN", box.Min)
+		variable2(e, "$LIMMAX", box.Max)
+		e.WriteString(9, "$LTSCALE")
+		e.WriteFloat(40, 1)
+		e.WriteString(9, "$CLAYER")
+		e.WriteString(8, layerZero)
+		e.WriteString(9, "$CELTYPE")
+		e.WriteString(6, "BYLAYER")
+		e.WriteString(9, "$CECOLOR")
+		e.WriteInt(62, 256) // by layer
+		integer(e, "$LUNITS", 2)
+		integer(e, "$LUPREC", 4)
+		integer(e, "$AUNITS", 0)
 		if h.version == R12 {
 			return
 		}
-		f.WriteString(9, "$TEXTSTYLE")
-		f.WriteString(7, standard)
-		f.WriteString(9, "$DIMSTYLE")
-		f.WriteString(2, standard)
+		e.WriteString(9, "$TEXTSTYLE")
+		e.WriteString(7, standard)
+		e.WriteString(9, "$DIMSTYLE")
+		e.WriteString(2, standard)
 		if h.sheet.Unit == export.Inch {
-			integer(f, "$INSUNITS", insunitsInch)
-			integer(f, "$MEASUREMENT", measurementInch)
+			integer(e, "$INSUNITS", insunitsInch)
+			integer(e, "$MEASUREMENT", measurementInch)
 		} else {
-			integer(f, "$INSUNITS", insunitsMillimetre)
-			integer(f, "$MEASUREMENT", measurementMetric)
+			integer(e, "$INSUNITS", insunitsMillimetre)
+			integer(e, "$MEASUREMENT", measurementMetric)
 		}
-		f.WriteString(9, "$HANDSEED")
-		f.WriteHex(5, h.handseed)
+		e.WriteString(9, "$HANDSEED")
+		e.WriteHex(5, h.handseed)
 	})
 }
 
@@ -92,19 +92,19 @@ func integer(f format.Formatter, name string, v int) {
 type classes struct{}
 
 // Format writes the section.
-func (classes) Format(f format.Formatter) {
-	section(f, "CLASSES", func() {
+func (classes) Format(e *encoder) {
+	e.section("CLASSES", func() {
 		for _, c := range [2][2]string{
 			{"ACDBDICTIONARYWDFLT", "AcDbDictionaryWithDefault"},
 			{"ACDBPLACEHOLDER", "AcDbPlaceHolder"},
 		} {
-			f.WriteString(0, "CLASS")
-			f.WriteString(1, c[0])
-			f.WriteString(2, c[1])
-			f.WriteString(3, "ObjectDBX Classes")
-			f.WriteInt(90, 0)
-			f.WriteInt(280, 0)
-			f.WriteInt(281, 0)
+			e.WriteString(0, "CLASS")
+			e.WriteString(1, c[0])
+			e.WriteString(2, c[1])
+			e.WriteString(3, "ObjectDBX Classes")
+			e.WriteInt(90, 0)
+			e.WriteInt(280, 0)
+			e.WriteInt(281, 0)
 		}
 	})
 }

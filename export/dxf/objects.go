@@ -1,7 +1,6 @@
 package dxf
 
 import (
-	"github.com/yofu/dxf/format"
 	"github.com/yofu/dxf/object"
 )
 
@@ -32,33 +31,33 @@ func (o *objects) SetHandle(next *int) {
 }
 
 // Format writes the section.
-func (o *objects) Format(f format.Formatter) {
+func (o *objects) Format(e *encoder) {
 	const keepRecords = 1 // of clones, when dictionaries are merged
-	section(f, "OBJECTS", func() {
-		f.WriteString(0, "DICTIONARY")
-		o.root.Format(f)
-		f.WriteString(100, "AcDbDictionary")
-		f.WriteInt(281, keepRecords)
-		f.WriteString(3, "ACAD_GROUP")
-		f.WriteHex(350, o.groups.handle)
-		f.WriteString(3, "ACAD_PLOTSTYLENAME")
-		f.WriteHex(350, o.plotStyles.handle)
+	e.section("OBJECTS", func() {
+		e.WriteString(0, "DICTIONARY")
+		o.root.Format(e)
+		e.WriteString(100, "AcDbDictionary")
+		e.WriteInt(281, keepRecords)
+		e.WriteString(3, "ACAD_GROUP")
+		e.WriteHex(350, o.groups.handle)
+		e.WriteString(3, "ACAD_PLOTSTYLENAME")
+		e.WriteHex(350, o.plotStyles.handle)
 
-		f.WriteString(0, "DICTIONARY")
-		o.groups.Format(f)
-		f.WriteString(100, "AcDbDictionary")
-		f.WriteInt(281, keepRecords)
+		e.WriteString(0, "DICTIONARY")
+		o.groups.Format(e)
+		e.WriteString(100, "AcDbDictionary")
+		e.WriteInt(281, keepRecords)
 
-		f.WriteString(0, "ACDBDICTIONARYWDFLT")
-		o.plotStyles.Format(f)
-		f.WriteString(100, "AcDbDictionary")
-		f.WriteInt(281, keepRecords)
-		f.WriteString(3, "Normal")
-		f.WriteHex(350, o.placeholder.handle)
-		f.WriteString(100, "AcDbDictionaryWithDefault")
-		f.WriteHex(340, o.placeholder.handle)
+		e.WriteString(0, "ACDBDICTIONARYWDFLT")
+		o.plotStyles.Format(e)
+		e.WriteString(100, "AcDbDictionary")
+		e.WriteInt(281, keepRecords)
+		e.WriteString(3, "Normal")
+		e.WriteHex(350, o.placeholder.handle)
+		e.WriteString(100, "AcDbDictionaryWithDefault")
+		e.WriteHex(340, o.placeholder.handle)
 
-		f.WriteString(0, "ACDBPLACEHOLDER")
-		o.placeholder.Format(f)
+		e.WriteString(0, "ACDBPLACEHOLDER")
+		o.placeholder.Format(e)
 	})
 }

@@ -1,8 +1,8 @@
 package dxf
 
 import (
-	"github.com/yofu/dxf/format"
 	"github.com/yofu/dxf/table"
+	"gonum.org/v1/gonum/spatial/r2"
 
 	"flankwright/profile/fit"
 )
@@ -30,20 +30,6 @@ func (p *polyline) closed() int {
 	return 0
 }
 
-// vertices calls f for each vertex with the bulge of the segment it starts. A
-// closed path does not repeat its first vertex; an open one ends in a vertex
-// that starts nothing.
-func (p *polyline) vertices(f func(x, y, bulge float64)) {
-	for i := range p.path.Segments {
-		s := &p.path.Segments[i]
-		f(s.Start.X, s.Start.Y, s.Bulge)
-	}
-	if !p.path.Closed {
-		end := p.path.Segments[len(p.path.Segments)-1].End
-		f(end.X, end.Y, 0)
-	}
-}
-
 // count is the number of vertices.
 func (p *polyline) count() int {
 	return len(p.path.Segments) + 1 - p.closed()
@@ -59,50 +45,59 @@ func (p *polyline) curved() bool {
 	return false
 }
 
-// Format writes the polyline for R2000.
-func (p *polyline) Format(f format.Formatter) {
-	f.WriteString(0, "LWPOLYLINE")
-	p.node.Format(f)
-	f.WriteString(100, "AcDbEntity")
-	f.WriteString(8, p.layer.Name())
-	f.WriteString(100, "AcDbPolyline")
-	f.WriteInt(90, p.count())
-	f.WriteInt(70, p.closed())
+// format writes the polyline for R2000: each vertex with the bulge of the segment it
+// starts. A closed path does not repeat its first vertex; an open one ends in a vertex
+// that starts nothing.
+func (p *polyline) format(e *encoder) {
+	e.WriteString(0, "LWPOLYLINE")
+	p.node.Format(e)
+	e.WriteString(100, "AcDbEntity")
+	e.WriteString(8, p.layer.Name())
+	e.WriteString(100, "AcDbPolyline")
+	e.WriteInt(90, p.count())
+	e.WriteInt(70, p.closed())
 	curved := p.curved()
-	p.vertices(func(x, y, bulge float64) {
-		f.WriteFloat(10, x)
-		f.WriteFloat(20, y)
-		if curved {
-			f.WriteFloat(42, bulge)
-		}
-	})
+	for i := range p.path.Segments {
+		s := &p.path.Segments[i]
+		e.vertex(s.Start, s.Bulge, curved)
+	}
+	if !p.path.Closed {
+		e.vertex(p.end(), 0, curved)
+	}
 }
 
-// polylineR12 writes the same as POLYLINE, VERTEX and SEQEND.
-type polylineR12 struct{ *polyline }
-
-// Format writes the polyline for R12.
-func (p polylineR12) Format(f format.Formatter) {
-	f.WriteString(0, "POLYLINE")
-	f.WriteString(8, p.layer.Name())
-	f.WriteInt(66, 1) // vertices follow
-	point(f, 0, 0)    // elevation; x and y must be zero
-	f.WriteInt(70, p.closed())
+// formatR12 writes the same as POLYLINE, VERTEX and SEQEND.
+func (p *polyline) formatR12(e *encoder) {
+	e.WriteString(0, "POLYLINE")
+	e.WriteString(8, p.layer.Name())
+	e.WriteInt(66, 1)  // vertices follow
+	point(e, r2.Vec{}) // elevation; x and y must be zero
+	e.WriteInt(70, p.closed())
 	curved := p.curved()
-	p.vertices(func(x, y, bulge float64) {
-		f.WriteString(0, "VERTEX")
-		f.WriteString(8, p.layer.Name())
-		point(f, x, y)
+	vertex := func(at r2.Vec, bulge float64) {
+		e.WriteString(0, "VERTEX")
+		e.WriteString(8, p.layer.Name())
+		point(e, at)
 		if curved {
-			f.WriteFloat(42, bulge)
+			e.WriteFloat(42, bulge)
 		}
-	})
-	f.WriteString(0, "SEQEND")
-	f.WriteString(8, p.layer.Name())
+	}
+	for i := range p.path.Segments {
+		s := &p.path.Segments[i]
+		vertex(s.Start, s.Bulge)
+	}
+	if !p.path.Closed {
+		vertex(p.end(), 0)
+	}
+	e.WriteString(0, "SEQEND")
+	e.WriteString(8, p.layer.Name())
 }
 
-func point(f format.Formatter, x, y float64) {
-	f.WriteFloat(10, x)
-	f.WriteFloat(20, y)
-	f.WriteFloat(30, 0)
+// end is the last point of the path.
+func (p *polyline) end() r2.Vec { return p.path.Segments[len(p.path.Segments)-1].End }
+
+func point(e *encoder, at r2.Vec) {
+	e.WriteFloat(10, at.X)
+	e.WriteFloat(20, at.Y)
+	e.WriteFloat(30, 0)
 }

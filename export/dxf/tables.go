@@ -156,10 +156,10 @@ func (t *tables) SetHandle(next *int) {
 }
 
 // Format writes the section.
-func (t *tables) Format(f format.Formatter) {
-	section(f, "TABLES", func() {
+func (t *tables) Format(e *encoder) {
+	e.section("TABLES", func() {
 		for _, st := range t.tables {
-			st.Format(f)
+			st.Format(e)
 		}
 	})
 }

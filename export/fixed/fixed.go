@@ -6,7 +6,10 @@
 package fixed
 
 import (
+	"encoding/binary"
 	"math"
+	"math/bits"
+	"slices"
 	"strconv"
 )
 
@@ -49,24 +52,45 @@ func Append(dst []byte, x float64) []byte {
 	if !(math.Abs(x) < exact) {
 		return trim(strconv.AppendFloat(dst, x, 'f', Decimals, 64))
 	}
-	n := int64(math.RoundToEven(x * perUnit))
-	if n < 0 {
-		dst = append(dst, '-')
-		n = -n
+	steps := int64(math.RoundToEven(x * perUnit))
+	n := uint64(max(steps, -steps))
+	whole, frac := uint32(n/perUnit), uint32(n%perUnit) // 32 bits divide faster
+
+	used := len(dst)
+	dst = slices.Grow(dst, longest)
+	text := (*[longest]byte)(dst[used : used+longest])
+	at := 0
+	if steps < 0 {
+		text[0] = '-'
+		at = 1
 	}
-	dst = strconv.AppendInt(dst, n/perUnit, 10)
-	frac := uint32(n % perUnit) // 32 bits divide faster
-	var digits [1 + Decimals]byte
-	digits[0] = '.'
-	for i := Decimals; i > 0; i-- {
-		digits[i] = byte('0' + frac%10)
-		frac /= 10
-	}
-	end := len(digits)
-	for end > 2 && digits[end-1] == '0' {
-		end--
-	}
-	return append(dst, digits[:end]...)
+	digits := eight(whole)
+	leading := min(7, bits.TrailingZeros64(digits)/8) // zeros
+	binary.LittleEndian.PutUint64(text[at:], (digits|zeros)>>(8*leading))
+	at += 8 - leading
+	const eighth = 100_000_000
+	text[at], text[at+1] = '.', byte('0'+frac/eighth)
+	digits = eight(frac % eighth)
+	binary.LittleEndian.PutUint64(text[at+2:], digits|zeros)
+	trailing := bits.LeadingZeros64(digits) / 8
+	return dst[:used+at+Decimals+1-trailing]
+}
+
+// longest is how many bytes a number takes: sign, 8 digits, point, decimals.
+const longest = 1 + 8 + 1 + Decimals
+
+// zeros is the text of eight digits 0.
+const zeros = 0x3030303030303030
+
+// eight returns the eight decimal digits of n below 10^8, one a byte, the first in
+// the lowest. All digits are parted at once: a number in a lane is halved into two
+// lanes by its quotient and remainder, the quotient as a product and a shift.
+func eight(n uint32) uint64 {
+	v := uint64(n/10_000) | uint64(n%10_000)<<32
+	q := v * 10_486 >> 20 & 0x0000_007f_0000_007f // by 100
+	v = q | (v-100*q)<<16
+	q = v * 103 >> 10 & 0x000f_000f_000f_000f // by 10
+	return q | (v-10*q)<<8
 }
 
 // AppendDecimals appends x in fixed point with at most the given number of

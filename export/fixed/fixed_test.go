@@ -4,6 +4,7 @@ import (
 	"math"
 	"math/rand/v2"
 	"strconv"
+	"strings"
 	"testing"
 )
 
@@ -63,6 +64,28 @@ func TestRoundTrip(t *testing.T) {
 		}
 		if d := math.Abs(r - x); d > Step/2+math.Abs(x)*1e-15 {
 			t.Fatalf("Round(%v) is %v away", x, d)
+		}
+	}
+}
+
+// Digits are those of strconv, for whole numbers of steps of every length.
+func TestAppendDigits(t *testing.T) {
+	rng := rand.New(rand.NewPCG(3, 4))
+	for range 100_000 {
+		n := rng.Int64N(1<<51) >> rng.IntN(51) // below Limit, half a step is seen exactly
+		if rng.IntN(2) == 0 {
+			n -= n % 1000
+		}
+		x := float64(n) / 1e9
+		want := strings.TrimRight(strconv.FormatFloat(-x, 'f', Decimals, 64), "0")
+		if strings.HasSuffix(want, ".") {
+			want += "0"
+		}
+		if n == 0 {
+			want = "0.0"
+		}
+		if got := string(Append([]byte("x"), -x)); got != "x"+want {
+			t.Fatalf("Append(%v) = %q, want %q", -x, got, want)
 		}
 	}
 }

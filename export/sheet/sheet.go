@@ -7,6 +7,7 @@ package sheet
 import (
 	"fmt"
 	"math"
+	"slices"
 
 	"gonum.org/v1/gonum/spatial/r2"
 
@@ -28,6 +29,11 @@ type Sheet struct {
 	Unit   export.Unit
 	Items  []export.Item // in the order of the drawing
 	Bounds r2.Box        // least box around all items, rounded
+
+	// What Items point into.
+	segments []fit.Segment
+	paths    []fit.Path
+	circles  []export.Circle
 }
 
 // New scales, rounds and checks d. The error is an *Error; the first violation
@@ -37,11 +43,21 @@ type Sheet struct {
 // not look for are loops that cross themselves or each other: that needs the
 // exact geometry and is the solver's promise.
 func New(d export.Drawing) (*Sheet, error) {
+	s := new(Sheet)
+	if err := s.Set(d); err != nil {
+		return nil, err
+	}
+	return s, nil
+}
+
+// Set makes s the sheet of another drawing, as New does, in the memory of the one
+// before. After an error s is of no use but to be set again.
+func (s *Sheet) Set(d export.Drawing) error {
 	if len(d.Items) == 0 {
-		return nil, &Error{Rule: RuleEmpty, Item: -1, Segment: -1}
+		return &Error{Rule: RuleEmpty, Item: -1, Segment: -1}
 	}
 	if d.Unit != export.Millimetre && d.Unit != export.Inch {
-		return nil, &Error{Rule: RuleUnit, Item: -1, Segment: -1, Detail: fmt.Sprint(uint8(d.Unit))}
+		return &Error{Rule: RuleUnit, Item: -1, Segment: -1, Detail: fmt.Sprint(uint8(d.Unit))}
 	}
 	segments, paths, circles := 0, 0, 0
 	for _, it := range d.Items {
@@ -53,36 +69,33 @@ func New(d export.Drawing) (*Sheet, error) {
 			circles++
 		}
 	}
-	b := builder{
-		scale:    d.Unit.Scale(),
-		segments: make([]fit.Segment, 0, segments),
-		paths:    make([]fit.Path, 0, paths),
-		circles:  make([]export.Circle, 0, circles),
-	}
-	s := &Sheet{Unit: d.Unit, Items: make([]export.Item, 0, len(d.Items))}
+	// Room for all, so that nothing moves while items point into it.
+	s.Unit = d.Unit
+	s.Items = slices.Grow(s.Items[:0], len(d.Items))
+	s.segments = slices.Grow(s.segments[:0], segments)
+	s.paths = slices.Grow(s.paths[:0], paths)
+	s.circles = slices.Grow(s.circles[:0], circles)
+	b := builder{Sheet: s, scale: d.Unit.Scale()}
 	for i, it := range d.Items {
 		b.item, b.layer = i, it.Layer
 		out, err := b.convert(it)
 		if err != nil {
-			return nil, err
+			return err
 		}
 		s.Items = append(s.Items, out)
 	}
 	s.Bounds = bounds(s.Items)
 	if !fixed.InRange(s.Bounds.Min.X) || !fixed.InRange(s.Bounds.Min.Y) ||
 		!fixed.InRange(s.Bounds.Max.X) || !fixed.InRange(s.Bounds.Max.Y) {
-		return nil, &Error{Rule: RuleFinite, Item: -1, Segment: -1, Detail: fmt.Sprint(s.Bounds)}
+		return &Error{Rule: RuleFinite, Item: -1, Segment: -1, Detail: fmt.Sprint(s.Bounds)}
 	}
-	return s, nil
+	return nil
 }
 
-// builder converts item by item into arrays shared by the whole sheet.
+// builder converts item by item into the arrays of the sheet.
 type builder struct {
-	scale    float64
-	segments []fit.Segment
-	paths    []fit.Path
-	circles  []export.Circle
-
+	*Sheet
+	scale float64
 	item  int          // index of the item being converted, for errors
 	layer export.Layer // its layer
 }
@@ -117,7 +130,7 @@ func (b *builder) convert(it export.Item) (export.Item, error) {
 		out.Circle = &b.circles[len(b.circles)-1]
 		return out, nil
 	}
-	path, err := b.path(*it.Path)
+	path, err := b.path(it.Path)
 	if err != nil {
 		return it, err
 	}
@@ -127,69 +140,76 @@ func (b *builder) convert(it export.Item) (export.Item, error) {
 }
 
 // path rounds the points of p and checks every segment.
-func (b *builder) path(p fit.Path) (fit.Path, error) {
+func (b *builder) path(p *fit.Path) (fit.Path, error) {
 	n := len(p.Segments)
 	if n == 0 || p.Closed && n < 2 {
-		return p, b.fail(RuleSegments, -1, r2.Vec{}, fmt.Sprintf("%d", n))
+		return fit.Path{}, b.fail(RuleSegments, -1, r2.Vec{}, fmt.Sprintf("%d", n))
 	}
 	first := len(b.segments)
-	least := MinSegment * b.scale
-	for i, s := range p.Segments {
-		out, err := b.segment(s, i, least)
-		if err != nil {
-			return p, err
-		}
-		if i > 0 && out.Start != b.segments[first+i-1].End {
-			return p, b.fail(RuleGap, i, s.Start, "")
-		}
-		b.segments = append(b.segments, out)
-	}
+	b.segments = b.segments[:first+n]
 	// The capacity is cut so that nothing appended to one path can reach the next.
 	segs := b.segments[first : first+n : first+n]
+	least := MinSegment * b.scale
+	for i := range segs {
+		s, out := &p.Segments[i], &segs[i]
+		*out = fit.Segment{Kind: s.Kind}
+		ok := true
+		if i > 0 && s.Start == p.Segments[i-1].End {
+			out.Start = segs[i-1].End
+		} else {
+			out.Start, ok = b.round(s.Start)
+		}
+		if err := b.segment(out, s, i, least, ok); err != nil {
+			return fit.Path{}, err
+		}
+		if i > 0 && out.Start != segs[i-1].End {
+			return fit.Path{}, b.fail(RuleGap, i, s.Start, "")
+		}
+	}
 	if p.Closed {
 		if segs[n-1].End != segs[0].Start {
-			return p, b.fail(RuleGap, n-1, p.Segments[n-1].End, "the path does not close")
+			return fit.Path{}, b.fail(RuleGap, n-1, p.Segments[n-1].End, "the path does not close")
 		}
 		if n == 2 && segs[0].Kind != fit.Cubic && segs[1].Kind != fit.Cubic && segs[0].Bulge == -segs[1].Bulge {
-			return p, b.fail(RuleFlat, 1, p.Segments[1].Start, "")
+			return fit.Path{}, b.fail(RuleFlat, 1, p.Segments[1].Start, "")
 		}
 	}
 	return fit.Path{Segments: segs, Closed: p.Closed}, nil
 }
 
-// segment rounds and checks one segment; i is its index in the path.
-func (b *builder) segment(s fit.Segment, i int, least float64) (fit.Segment, error) {
-	start, ok := b.round(s.Start)
-	end, ok2 := b.round(s.End)
-	if !ok || !ok2 {
-		return s, b.fail(RuleFinite, i, s.Start, fmt.Sprintf("%v to %v", s.Start, s.End))
+// segment rounds and checks all of s but its start, which out holds already; i is
+// its index in the path.
+func (b *builder) segment(out, s *fit.Segment, i int, least float64, startOK bool) error {
+	var ok bool
+	out.End, ok = b.round(s.End)
+	if !startOK || !ok {
+		return b.fail(RuleFinite, i, s.Start, fmt.Sprintf("%v to %v", s.Start, s.End))
 	}
-	out := fit.Segment{Kind: s.Kind, Start: start, End: end}
-	dx, dy := end.X-start.X, end.Y-start.Y
+	dx, dy := out.End.X-out.Start.X, out.End.Y-out.Start.Y
 	if dx*dx+dy*dy < least*least {
-		return s, b.fail(RuleShort, i, s.Start, fmt.Sprintf("%.3g", s.Chord()))
+		return b.fail(RuleShort, i, s.Start, fmt.Sprintf("%.3g", s.Chord()))
 	}
 	switch s.Kind {
 	case fit.Line:
 	case fit.Arc:
 		if !(math.Abs(s.Bulge) < 1) { // NaN too
-			return s, b.fail(RuleTurn, i, s.Start, fmt.Sprintf("bulge %g", s.Bulge))
+			return b.fail(RuleTurn, i, s.Start, fmt.Sprintf("bulge %g", s.Bulge))
 		}
 		out.Bulge = fixed.Round(s.Bulge)
 		if math.Abs(out.Bulge) >= 1 {
-			return s, b.fail(RuleTurn, i, s.Start, "180 degrees after rounding")
+			return b.fail(RuleTurn, i, s.Start, "180 degrees after rounding")
 		}
 	case fit.Cubic:
-		var ok3, ok4 bool
-		out.C1, ok3 = b.round(s.C1)
-		out.C2, ok4 = b.round(s.C2)
-		if !ok3 || !ok4 {
-			return s, b.fail(RuleFinite, i, s.Start, fmt.Sprintf("handles %v, %v", s.C1, s.C2))
+		var ok1, ok2 bool
+		out.C1, ok1 = b.round(s.C1)
+		out.C2, ok2 = b.round(s.C2)
+		if !ok1 || !ok2 {
+			return b.fail(RuleFinite, i, s.Start, fmt.Sprintf("handles %v, %v", s.C1, s.C2))
 		}
 	default:
-		return s, b.fail(RuleKind, i, s.Start, fmt.Sprint(uint8(s.Kind)))
+		return b.fail(RuleKind, i, s.Start, fmt.Sprint(uint8(s.Kind)))
 	}
-	return out, nil
+	return nil
 }
 
 // round scales and rounds a point; ok is false if it cannot be a coordinate.
@@ -216,8 +236,11 @@ func ValidLayer(l export.Layer) bool {
 // sagitta |b| c / 2 is below half a step of the last decimal, so that no digit
 // of the file could tell the two apart.
 func Straight(s fit.Segment) bool {
-	return s.Kind == fit.Line || s.Kind == fit.Arc && math.Abs(s.Bulge)*s.Chord() < fixed.Step
+	return s.Kind == fit.Line || s.Kind == fit.Arc && Flat(s.Bulge, s.Chord())
 }
+
+// Flat says the same of an arc by its bulge and chord.
+func Flat(bulge, chord float64) bool { return math.Abs(bulge)*chord < fixed.Step }
 
 // Has reports whether the path holds a segment of kind k.
 func Has(p *fit.Path, k fit.Kind) bool {

@@ -159,3 +159,29 @@ func TestDecimalRefusesWhatIsNoNumber(t *testing.T) {
 		}
 	}
 }
+
+// TestAsTheStandardLibraryWrites: the bytes are those of encoding/json, and reading them
+// back loses nothing.
+func TestAsTheStandardLibraryWrites(t *testing.T) {
+	data := gear(t, export.Inch)
+	doc, err := sidecar.Read(data)
+	if err != nil {
+		t.Fatal(err)
+	}
+	doc.Warnings = append(doc.Warnings, sidecar.Warning{Code: "odd", Message: "a < b & \"c\" \u2028 \x01 ü"})
+	want, err := json.MarshalIndent(doc, "", "  ")
+	if err != nil {
+		t.Fatal(err)
+	}
+	got, err := doc.Append([]byte("before"))
+	if err != nil || string(got) != "before"+string(want)+"\n" {
+		t.Errorf("written is\n%s\nnot\n%s\n%v", got, want, err)
+	}
+	again, err := sidecar.Read(got[len("before"):])
+	if err != nil {
+		t.Fatal(err)
+	}
+	if twice, err := again.Marshal(); err != nil || !bytes.Equal(twice, got[len("before"):]) {
+		t.Errorf("read back and written it is\n%s\n%v", twice, err)
+	}
+}

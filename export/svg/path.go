@@ -20,38 +20,47 @@ import (
 // A quarter turn is not split.
 const maxBulge = 0.5
 
-// chain appends the path data of p: M, then L, A or C for each segment, and Z if
+// chain writes the path data of p: M, then L, A or C for each segment, and Z if
 // p is closed, where the last point repeats the first digit by digit.
-func (w *writer) chain(dst []byte, p *fit.Path) []byte {
-	dst = w.point(command(dst, 'M'), p.Segments[0].Start)
+func (w *writer) chain(p *fit.Path) {
+	w.command('M')
+	w.point(p.Segments[0].Start)
 	for i := range p.Segments {
 		s := &p.Segments[i]
-		switch {
-		case s.Kind == fit.Cubic:
-			dst = w.point(command(dst, 'C'), s.C1)
-			dst = w.point(append(dst, ' '), s.C2)
-			dst = w.point(append(dst, ' '), s.End)
-		case sheet.Straight(*s):
-			dst = w.point(command(dst, 'L'), s.End)
-		default:
-			dst = w.arc(dst, s)
+		if s.Kind == fit.Arc {
+			w.arc(s)
+			continue
 		}
+		if s.Kind == fit.Cubic {
+			w.command('C')
+			w.point(s.C1)
+			w.buf = append(w.buf, ' ')
+			w.point(s.C2)
+			w.buf = append(w.buf, ' ')
+		} else {
+			w.command('L')
+		}
+		w.point(s.End)
 	}
 	if p.Closed {
-		dst = append(dst, " Z"...)
+		w.close()
 	}
-	return dst
 }
 
-// arc appends one or two A commands. Flags are separated by blanks: packed ones
-// are legal and still misread.
-func (w *writer) arc(dst []byte, s *fit.Segment) []byte {
-	radius := s.Radius()
-	if math.Abs(s.Bulge) > maxBulge {
-		mid := middle(s)
-		dst = w.arcTo(dst, radius, s.Bulge > 0, mid)
+// arc writes one or two A commands, or an L where the digits cannot tell the
+// arc from its chord.
+func (w *writer) arc(s *fit.Segment) {
+	chord := s.Chord()
+	if sheet.Flat(s.Bulge, chord) {
+		w.command('L')
+		w.point(s.End)
+		return
 	}
-	return w.arcTo(dst, radius, s.Bulge > 0, s.End)
+	radius := fit.ArcRadius(chord, s.Bulge)
+	if math.Abs(s.Bulge) > maxBulge {
+		w.arcTo(radius, s.Bulge > 0, middle(s))
+	}
+	w.arcTo(radius, s.Bulge > 0, s.End)
 }
 
 // middle is the point of an arc farthest from its chord: from the middle of the
@@ -62,47 +71,54 @@ func middle(s *fit.Segment) r2.Vec {
 	return r2.Add(m, r2.Scale(s.Bulge/2, r2.Vec{X: d.Y, Y: -d.X}))
 }
 
-// arcTo appends an A command to the point end of the drawing. ccw is the turn
+// arcTo writes an A command to the point end of the drawing. ccw is the turn
 // as seen in the drawing; on the page, whose y runs down, it looks the same and
-// has the sweep flag 0.
-func (w *writer) arcTo(dst []byte, radius float64, ccw bool, end r2.Vec) []byte {
-	dst = fixed.Append(command(dst, 'A'), radius)
-	dst = fixed.Append(append(dst, ' '), radius)
+// has the sweep flag 0. Flags are separated by blanks: packed ones are legal and
+// still misread.
+func (w *writer) arcTo(radius float64, ccw bool, end r2.Vec) {
+	w.command('A')
+	start := len(w.buf)
+	w.buf = append(fixed.Append(w.buf, radius), ' ')
+	w.buf = append(w.buf, w.buf[start:]...) // the other half-axis
 	if ccw {
-		dst = append(dst, " 0 0 0 "...)
+		w.buf = append(w.buf, "0 0 0 "...)
 	} else {
-		dst = append(dst, " 0 0 1 "...)
+		w.buf = append(w.buf, "0 0 1 "...)
 	}
-	return w.point(dst, end)
+	w.point(end)
 }
 
-// circleData appends a circle as four quarter arcs.
-func (w *writer) circleData(dst []byte, c *export.Circle, ccw bool) []byte {
+// circleData writes a circle as four quarter arcs.
+func (w *writer) circleData(c *export.Circle, ccw bool) {
 	at := func(x, y float64) r2.Vec { return r2.Vec{X: c.Center.X + x, Y: c.Center.Y + y} }
 	r := c.Radius
 	first := at(r, 0)
-	dst = w.point(command(dst, 'M'), first)
+	w.command('M')
+	w.point(first)
 	turn := 1.0
 	if !ccw {
 		turn = -1
 	}
 	for _, p := range [4]r2.Vec{at(0, turn*r), at(-r, 0), at(0, -turn*r), first} {
-		dst = w.arcTo(dst, r, ccw, p)
+		w.arcTo(r, ccw, p)
 	}
-	return append(dst, " Z"...)
+	w.close()
 }
 
-// command appends a command letter and a blank.
-func command(dst []byte, letter byte) []byte {
-	if len(dst) > 0 {
-		dst = append(dst, ' ')
+// command writes a command letter and a blank, and one before unless it is the
+// first of the attribute.
+func (w *writer) command(letter byte) {
+	if w.buf[len(w.buf)-1] != '"' {
+		w.buf = append(w.buf, ' ')
 	}
-	return append(dst, letter, ' ')
+	w.buf = append(w.buf, letter, ' ')
 }
 
-// point appends the coordinates of a point of the drawing.
-func (w *writer) point(dst []byte, v r2.Vec) []byte {
-	p := w.at(v)
-	dst = fixed.Append(dst, p.X)
-	return fixed.Append(append(dst, ' '), p.Y)
+// close writes the command that ends a loop.
+func (w *writer) close() { w.buf = append(w.buf, " Z"...) }
+
+// point writes the coordinates of a point of the drawing.
+func (w *writer) point(v r2.Vec) {
+	w.buf = append(fixed.Append(w.buf, v.X-w.left), ' ')
+	w.buf = fixed.Append(w.buf, w.top-v.Y)
 }

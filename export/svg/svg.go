@@ -1,7 +1,6 @@
 package svg
 
 import (
-	"bytes"
 	"fmt"
 	"slices"
 	"strings"
@@ -45,27 +44,33 @@ const (
 //
 // with w the stroke width, in the unit of the drawing.
 func Marshal(d export.Drawing, opt Options) ([]byte, error) {
-	if opt.StrokeWidth == 0 {
-		opt.StrokeWidth = DefaultStrokeWidth
-	}
-	stroke := fixed.Round(opt.StrokeWidth * d.Unit.Scale())
-	if !(stroke > 0) || !fixed.InRange(stroke) {
-		return nil, &sheet.Error{
-			Rule: sheet.RuleOptions, Item: -1, Segment: -1,
-			Detail: fmt.Sprintf("stroke width %v mm", opt.StrokeWidth),
-		}
-	}
 	s, err := sheet.New(d)
 	if err != nil {
 		return nil, err
 	}
-	var buf bytes.Buffer // never fails, so the errors svgo drops are none
+	return AppendSheet(nil, s, opt)
+}
+
+// AppendSheet appends the file of a sheet to dst, which may be a buffer kept from
+// an earlier call. On error it returns dst as it was.
+func AppendSheet(dst []byte, s *sheet.Sheet, opt Options) ([]byte, error) {
+	if opt.StrokeWidth == 0 {
+		opt.StrokeWidth = DefaultStrokeWidth
+	}
+	stroke := fixed.Round(opt.StrokeWidth * s.Unit.Scale())
+	if !(stroke > 0) || !fixed.InRange(stroke) {
+		return dst, &sheet.Error{
+			Rule: sheet.RuleOptions, Item: -1, Segment: -1,
+			Detail: fmt.Sprintf("stroke width %v mm", opt.StrokeWidth),
+		}
+	}
 	w := &writer{
-		SVG:   svgo.SVG{Writer: &buf, Decimals: fixed.Decimals},
 		page:  newPage(s.Bounds, stroke),
 		width: string(fixed.Append(nil, stroke)),
 		fill:  "none",
+		buf:   slices.Grow(dst, sizeEstimate(s)),
 	}
+	w.SVG = svgo.SVG{Writer: w, Decimals: fixed.Decimals} // drops errors, and w has none
 	if opt.Filled {
 		w.fill = fillColor
 	}
@@ -75,7 +80,20 @@ func Marshal(d export.Drawing, opt Options) ([]byte, error) {
 	}
 	w.markers(s.Items)
 	w.End()
-	return buf.Bytes(), nil
+	return w.buf, nil
+}
+
+// sizeEstimate is about as many bytes as the file takes, rather more than fewer.
+func sizeEstimate(s *sheet.Sheet) int {
+	const shell, element, segment = 500, 300, 75
+	n := shell
+	for _, it := range s.Items {
+		n += element
+		if it.Path != nil {
+			n += segment * len(it.Path.Segments)
+		}
+	}
+	return n
 }
 
 // page places the drawing on the page; lengths in the unit of the drawing.
@@ -92,7 +110,7 @@ func newPage(box r2.Box, margin float64) page {
 }
 
 // at is where a point of the drawing stands on the page. Both are rounded, so
-// points that were equal still are.
+// points that were equal still are. Path data are rounded where they are written.
 func (p page) at(v r2.Vec) r2.Vec {
 	return r2.Vec{X: fixed.Round(v.X - p.left), Y: fixed.Round(p.top - v.Y)}
 }
@@ -103,7 +121,24 @@ type writer struct {
 	page
 	width string // of the stroke
 	fill  string // of the part
-	data  []byte // path data, used again and again
+	buf   []byte // the file so far
+}
+
+// Write appends what svgo writes.
+func (w *writer) Write(p []byte) (int, error) {
+	w.buf = append(w.buf, p...)
+	return len(p), nil
+}
+
+// path writes a path element whose data are written by data.
+func (w *writer) path(data func(), attributes ...string) {
+	w.buf = append(w.buf, `<path d="`...)
+	data()
+	w.buf = append(w.buf, `" `...)
+	for _, a := range attributes {
+		w.buf = append(append(w.buf, a...), ' ')
+	}
+	w.buf = append(w.buf, "/>\n"...)
 }
 
 // start writes the root element. The method of svgo for that pads every number
@@ -159,37 +194,37 @@ func members(items []export.Item) []member {
 // member writes the closed loops as one path and each open chain as another,
 // which is never filled.
 func (w *writer) member(m member) {
-	w.data = w.data[:0]
-	for _, it := range m.items {
-		if it.Circle != nil || it.Path.Closed {
-			w.loop(it)
-		}
+	closed := func(it export.Item) bool { return it.Circle != nil || it.Path.Closed }
+	stroke := w.stroke(partColor)
+	if slices.ContainsFunc(m.items, closed) {
+		w.path(func() {
+			for _, it := range m.items {
+				if closed(it) {
+					w.loop(it)
+				}
+			}
+		}, append([]string{`id="part` + strings.ToLower(m.suffix) + `"`, `fill="` + w.fill + `"`, `fill-rule="evenodd"`}, stroke...)...)
 	}
-	id := `id="part` + strings.ToLower(m.suffix) + `"`
-	if len(w.data) > 0 {
-		w.Path(string(w.data), append([]string{id, `fill="` + w.fill + `"`, `fill-rule="evenodd"`}, w.stroke(partColor)...)...)
-	}
 	for _, it := range m.items {
-		if it.Path != nil && !it.Path.Closed {
-			w.data = w.chain(w.data[:0], it.Path)
-			w.Path(string(w.data), append([]string{`fill="none"`}, w.stroke(partColor)...)...)
+		if !closed(it) {
+			w.path(func() { w.chain(it.Path) }, append([]string{`fill="none"`}, stroke...)...)
 		}
 	}
 }
 
-// loop appends a closed item, counter-clockwise in the drawing if it is an
+// loop writes a closed item, counter-clockwise in the drawing if it is an
 // outer one and clockwise if it is a hole.
 func (w *writer) loop(it export.Item) {
 	if c := it.Circle; c != nil {
-		w.data = w.circleData(w.data, c, it.Role == export.Outer)
+		w.circleData(c, it.Role == export.Outer)
 		return
 	}
 	path := it.Path
-	if (path.Area() > 0) != (it.Role == export.Outer) {
+	if path.CounterClockwise() != (it.Role == export.Outer) {
 		turned := path.Reversed()
 		path = &turned
 	}
-	w.data = w.chain(w.data, path)
+	w.chain(path)
 }
 
 // markers writes the markers, one group for each layer in the order of their
@@ -213,8 +248,7 @@ func (w *writer) markers(items []export.Item) {
 				w.Circle(p.X, p.Y, c.Radius)
 				continue
 			}
-			w.data = w.chain(w.data[:0], it.Path)
-			w.Path(string(w.data))
+			w.path(func() { w.chain(it.Path) })
 		}
 		w.Gend()
 	}

@@ -46,10 +46,16 @@ type chain struct {
 func (c *chain) add(pitches int, lists ...[]Segment) {
 	rotate := r2.NewRotation(c.turn+float64(pitches)*c.pitch, r2.Vec{}).Rotate
 	for _, list := range lists {
-		for _, s := range list {
-			m := s.Mapped(rotate, false)
+		for i := range list {
+			s := &list[i]
+			m := Segment{Kind: s.Kind, End: rotate(s.End), Bulge: s.Bulge}
 			if n := len(c.segments); n > 0 {
 				m.Start = c.segments[n-1].End
+			} else {
+				m.Start = rotate(s.Start)
+			}
+			if s.Kind == Cubic {
+				m.C1, m.C2 = rotate(s.C1), rotate(s.C2)
 			}
 			c.segments = append(c.segments, m)
 		}

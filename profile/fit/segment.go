@@ -39,19 +39,27 @@ func ArcTo(a, b r2.Vec, bulge float64) Segment {
 	return Segment{Kind: Arc, Start: a, End: b, Bulge: bulge}
 }
 
-// Chord is the distance from Start to End.
-func (s Segment) Chord() float64 { return r2.Norm(r2.Sub(s.End, s.Start)) }
+// Chord is the distance from Start to End. Coordinates are far from where squares
+// overflow or vanish, so the plain root does, at a fraction of the time of math.Hypot.
+func (s *Segment) Chord() float64 {
+	dx, dy := s.End.X-s.Start.X, s.End.Y-s.Start.Y
+	return math.Sqrt(dx*dx + dy*dy)
+}
 
-// Radius is the radius of an Arc, with c the chord and b the bulge:
-//
-//	R = c (1 + b^2) / (4 |b|)
-//
-// It is +Inf for a straight segment.
+// Radius is the radius of an Arc, ArcRadius of its chord and bulge. It is +Inf for a
+// straight segment.
 func (s Segment) Radius() float64 {
 	if s.Kind != Arc || s.Bulge == 0 {
 		return math.Inf(1)
 	}
-	return s.Chord() * (1 + s.Bulge*s.Bulge) / (4 * math.Abs(s.Bulge))
+	return ArcRadius(s.Chord(), s.Bulge)
+}
+
+// ArcRadius is the radius in mm of an arc of chord c in mm and bulge b other than 0:
+//
+//	R = c (1 + b^2) / (4 |b|)
+func ArcRadius(chord, bulge float64) float64 {
+	return chord * (1 + bulge*bulge) / (4 * math.Abs(bulge))
 }
 
 // Included is the signed angle an Arc turns through, 4 atan(bulge); 0 for the
@@ -94,29 +102,36 @@ func (s Segment) SweptArea() float64 {
 	cross := r2.Cross(s.Start, s.End) / 2
 	switch s.Kind {
 	case Arc:
-		return cross + s.arcCap()
+		if s.Bulge == 0 {
+			return cross
+		}
+		return cross + arcCap(s.Radius(), s.Included())
 	case Cubic:
 		return s.cubicArea()
 	}
 	return cross
 }
 
-// arcCap is the area between an arc and its chord, R^2 (phi - sin phi)/2, with
-// the sign of the turn. For small angles the difference is taken from its
-// series, which keeps full precision where subtraction would not.
-func (s Segment) arcCap() float64 {
-	if s.Bulge == 0 {
-		return 0
+// measure is Length and SweptArea at once.
+func (s *Segment) measure() (length, area float64) {
+	if s.Kind != Arc || s.Bulge == 0 {
+		return s.Length(), s.SweptArea()
 	}
-	phi := s.Included()
-	r := s.Radius()
+	r, phi := s.Radius(), s.Included()
+	return r * math.Abs(phi), r2.Cross(s.Start, s.End)/2 + arcCap(r, phi)
+}
+
+// arcCap is the area between an arc of radius r and its chord, r^2 (phi - sin phi)/2,
+// with the sign of the included angle phi. For small angles the difference is taken
+// from its series, which keeps full precision where subtraction would not.
+func arcCap(r, phi float64) float64 {
 	const series = 0.1 // rad; the next term is below 1e-16 of the first there
-	diff := phi - math.Sin(phi)
 	if math.Abs(phi) < series {
 		q := phi * phi
-		diff = phi * q / 6 * (1 - q/20*(1-q/42*(1-q/72*(1-q/110))))
+		diff := phi * q / 6 * (1 - q/20*(1-q/42*(1-q/72*(1-q/110))))
+		return r * r * diff / 2
 	}
-	return r * r * diff / 2
+	return r * r * (phi - math.Sin(phi)) / 2
 }
 
 // Bounds returns the least box around the segment.
