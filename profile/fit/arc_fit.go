@@ -207,10 +207,11 @@ func (f *arcFit) measure() float64 {
 // chains by.
 func (f *arcFit) estimate() float64 {
 	worst := 0.0
-	for i, s := range f.chain {
+	for i := range f.chain {
 		u0, u1 := f.breaks[i], f.breaks[i+1]
+		ruler := f.chain[i].ruler()
 		for _, q := range [4]float64{0.2, 0.4, 0.6, 0.8} {
-			worst = math.Max(worst, math.Abs(s.offset(f.curve.At(u0+q*(u1-u0)))))
+			worst = math.Max(worst, math.Abs(ruler.offset(f.curve.At(u0+q*(u1-u0)))))
 		}
 	}
 	return worst

@@ -101,4 +101,9 @@ func arcFrom(a r2.Vec, heading float64, b r2.Vec) (Segment, float64) {
 }
 
 // wrapped brings an angle into [-pi, pi].
-func wrapped(angle float64) float64 { return math.Remainder(angle, 2*math.Pi) }
+func wrapped(angle float64) float64 {
+	if math.Abs(angle) <= math.Pi {
+		return angle
+	}
+	return math.Remainder(angle, 2*math.Pi)
+}

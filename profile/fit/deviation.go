@@ -19,11 +19,25 @@ import (
 //
 // which is N/4b = |p - center|^2 - R^2 divided by |p - center| + R.
 func (s Segment) offset(p r2.Vec) float64 {
-	d, q := r2.Sub(s.End, s.Start), r2.Sub(p, s.Start)
-	b := s.Bulge
-	n := 4*b*(r2.Dot(q, q)-r2.Dot(q, d)) - 2*(1-b*b)*(d.X*q.Y-d.Y*q.X)
-	k := math.Hypot(d.X, d.Y) * (1 + b*b)
-	return -n / (k + math.Sqrt(math.Max(0, k*k+4*b*n)))
+	r := s.ruler()
+	return r.offset(p)
+}
+
+// ruler is what offsets from one segment have in common.
+type ruler struct {
+	start, d r2.Vec
+	b4, j, k float64 // 4b, 2 (1 - b^2), K
+}
+
+func (s *Segment) ruler() ruler {
+	d, b := r2.Sub(s.End, s.Start), s.Bulge
+	return ruler{start: s.Start, d: d, b4: 4 * b, j: 2 * (1 - b*b), k: math.Hypot(d.X, d.Y) * (1 + b*b)}
+}
+
+func (r *ruler) offset(p r2.Vec) float64 {
+	d, q := r.d, r2.Sub(p, r.start)
+	n := r.b4*(r2.Dot(q, q)-r2.Dot(q, d)) - r.j*(d.X*q.Y-d.Y*q.X)
+	return -n / (r.k + math.Sqrt(math.Max(0, r.k*r.k+r.b4*n)))
 }
 
 // deviationSamples is how many equal parameter steps the search for the largest
@@ -38,9 +52,10 @@ const deviationSamples = 12
 // either way.
 func deviation(c profile.Curve, u0, u1 float64, s Segment) float64 {
 	var samples [deviationSamples + 1]float64
+	ruler := s.ruler()
 	at := func(i float64) float64 { return u0 + i/deviationSamples*(u1-u0) }
 	for i := range samples {
-		samples[i] = math.Abs(s.offset(c.At(at(float64(i)))))
+		samples[i] = math.Abs(ruler.offset(c.At(at(float64(i)))))
 	}
 	worst := math.Max(samples[0], samples[deviationSamples])
 	for i := 1; i < deviationSamples; i++ {
@@ -51,7 +66,7 @@ func deviation(c profile.Curve, u0, u1 float64, s Segment) float64 {
 		worst = math.Max(worst, mid)
 		if bend := left - 2*mid + right; bend < 0 {
 			top := float64(i) + (left-right)/(2*bend)
-			worst = math.Max(worst, math.Abs(s.offset(c.At(at(top)))))
+			worst = math.Max(worst, math.Abs(ruler.offset(c.At(at(top)))))
 		}
 	}
 	return worst
