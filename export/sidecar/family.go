@@ -1,6 +1,7 @@
 package sidecar
 
 import (
+	_ "embed"
 	"encoding/csv"
 	"encoding/json"
 	"fmt"
@@ -10,7 +11,7 @@ import (
 	"strings"
 	"unicode"
 
-	_ "embed"
+	gojson "github.com/goccy/go-json"
 )
 
 // FamilySchemaID names the version of the list of a family.
@@ -111,7 +112,7 @@ func (l *FamilyList) Add(row FamilyRow) error {
 	if row.Files == nil {
 		row.Files = []File{}
 	}
-	text, err := json.Marshal(row)
+	text, err := gojson.Marshal(row)
 	if err != nil {
 		return err
 	}
