@@ -1,11 +1,9 @@
 package main
 
-import (
-	"flankwright/export/sheet"
-)
+import "flankwright/export/sheet"
 
-// pages is memory for the bytes of a part. Another part may be rendered into it once
-// the files of the one before are written.
+// pages is memory for the bytes of a part, a worker's own. Another part may be rendered
+// into it once the files of the one before are written.
 type pages struct {
 	sheet    sheet.Sheet
 	drawings [][]byte
