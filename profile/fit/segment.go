@@ -117,7 +117,7 @@ func (s *Segment) measure() (length, area float64) {
 	if s.Kind != Arc || s.Bulge == 0 {
 		return s.Length(), s.SweptArea()
 	}
-	r := ArcRadius(math.Hypot(s.End.X-s.Start.X, s.End.Y-s.Start.Y), s.Bulge)
+	r := ArcRadius(s.Chord(), s.Bulge)
 	phi := 4 * math.Atan(s.Bulge)
 	return r * math.Abs(phi), r2.Cross(s.Start, s.End)/2 + arcCap(r, phi)
 }
