@@ -40,6 +40,7 @@ const (
 	RuleUnreachable     profile.Rule = "reading-unreachable"
 	RuleMateDiffers     profile.Rule = "mate-differs"
 	RuleNoMesh          profile.Rule = "no-mesh"
+	RuleUnknownSeries   profile.Rule = "unknown-series"
 	RuleTooFewReadings  profile.Rule = "too-few-readings"
 	RuleNothingExplains profile.Rule = "nothing-explains"
 )

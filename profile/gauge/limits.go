@@ -9,7 +9,7 @@ import (
 
 // Allowance are the upper and lower deviations in mm of the tooth thickness on the
 // reference circle from the gear's own; both are normally <= 0, Upper the larger.
-// The letter and number series of DIN 3967 are not known here.
+// AllowanceSeries knows those of DIN 3967.
 type Allowance struct{ Upper, Lower float64 }
 
 // Limits are the smallest and largest value in mm a measurement may take. Between

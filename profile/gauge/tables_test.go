@@ -219,7 +219,7 @@ func TestFlankToleranceRows(t *testing.T) {
 // TestEveryRowIsLookedAt keeps the list of rows and of tests together.
 func TestEveryRowIsLookedAt(t *testing.T) {
 	tested := []string{"T01", "T02-", "T03-", "T10", "T11", "T12", "T13", "T14", "T20", "T21", "T22", "T23", "T24", "T25", "T26-",
-		"T30-", "T31-", "T32-", "calc-N-", "calc-Q-", "Q01", "Q02", "Q03", "Q10"} // Q10 holds the formulas themselves
+		"T30-", "T31-", "T32-", "calc-N-", "calc-Q-", "Q01", "Q02", "Q03", "Q10", "B10", "B11"} // Q10 holds the formulas themselves
 rows:
 	for id := range references(t) {
 		for _, prefix := range tested {
