@@ -12,8 +12,8 @@ import (
 // AllowanceSeries is the thickness allowance of a name such as "cd25" for a reference
 // diameter in mm: the letters give the upper deviation A_sne, the number the tolerance
 // T_sn, and the lower deviation is A_sne - T_sn (DIN 3967:1978, tables 1 and 2, from
-// memory; the standard itself was not at hand). It
-// holds up to 1600 mm; other names and diameters are refused.
+// memory; the standard itself was not at hand). It holds up to 1600 mm; other names
+// and diameters are refused.
 func AllowanceSeries(name string, referenceDiameter float64) (Allowance, error) {
 	found := positive(ParamReferenceDiameter, referenceDiameter)
 	letters := strings.TrimRight(name, "0123456789")

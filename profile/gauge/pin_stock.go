@@ -21,10 +21,10 @@ const millimetresPerInch = 25.4
 // StockPin is the diameter in mm of a pin that is kept in stock and does: in inches the
 // gear wire of the pitch,
 //
-//	1.728/P, else 1.92/P; for a ring 1.44/P, else 1.68/P
+//	1.728/P or 1.92/P; for a ring 1.44/P or 1.68/P
 //
-// (Van Keuren wire sizes, from memory; P = 25.4/m), and where neither does, or in
-// millimetres, the pin nearest to the ideal one out of sets graded by 0.001 in, or by
+// (Van Keuren wire sizes, from memory; P = 25.4/m), whichever does and is nearer to the
+// ideal pin. Where neither does, and in millimetres, it is the nearest out of sets graded by 0.001 in, or by
 // 0.01 mm up to 1 mm, 0.1 mm up to 10 mm, 0.5 mm up to 20 mm and 1 mm above (common
 // practice, no source; DIN 2269 grades measuring pins but we do not quote its sizes).
 func (g Gear) StockPin(system System) (float64, error) {
@@ -32,24 +32,26 @@ func (g Gear) StockPin(system System) (float64, error) {
 	if found != nil {
 		return 0, found
 	}
-	does := func(d float64) bool { return d >= fits.Smallest && d <= fits.Largest }
-	if system == Inch {
-		for _, wire := range g.wires() {
-			if d := wire * g.spec.Module; does(d) {
-				return d, nil
-			}
-		}
-	}
 	ideal, err := g.IdealPin()
 	if err != nil {
 		return 0, err
 	}
-	perUnit := pinsPerUnit(ideal, system)
-	nearest := math.Round(ideal * perUnit)
-	best, off := 0.0, math.Inf(1)
-	for _, n := range []float64{nearest - 1, nearest, nearest + 1} {
-		if d := n / perUnit; does(d) && math.Abs(d-ideal) < off {
-			best, off = d, math.Abs(d-ideal)
+	best := 0.0
+	offer := func(d float64) {
+		if d >= fits.Smallest && d <= fits.Largest && (best == 0 || math.Abs(d-ideal) < math.Abs(best-ideal)) {
+			best = d
+		}
+	}
+	if system == Inch {
+		for _, wire := range g.wires() {
+			offer(wire * g.spec.Module)
+		}
+	}
+	if best == 0 {
+		perUnit := pinsPerUnit(ideal, system)
+		nearest := math.Round(ideal * perUnit)
+		for _, n := range []float64{nearest, nearest - 1, nearest + 1} {
+			offer(n / perUnit)
 		}
 	}
 	if best == 0 {
@@ -60,7 +62,7 @@ func (g Gear) StockPin(system System) (float64, error) {
 	return best, nil
 }
 
-// wires are the wire sizes in modules, the usual one first.
+// wires are the wire sizes in modules.
 func (g Gear) wires() []float64 {
 	if g.spec.Kind == Ring {
 		return []float64{1.44, 1.68}
