@@ -26,6 +26,8 @@ type partMade struct {
 	document *sidecar.Document
 	warnings []profile.Finding
 	choices  []sidecar.Chosen
+
+	inspection export.Inspection
 }
 
 // maker collects what the geometry refuses and warns of while a gear is made.
@@ -58,7 +60,7 @@ func makePart(j partJob) (*partMade, error) {
 	m := &maker{job: j, tooth: tooth, made: &partMade{dxf: j.dxf}, warnings: tooth.Warnings}
 	m.made.gear = export.Gear{Tooth: tooth, Fit: j.fit, Unit: j.unit, Turn: j.turn, Extent: j.extent, Reference: j.reference,
 		Cut: export.Cut{LeadIn: j.leadIn, Tabs: j.tabs, TabWidth: j.tabWidth}}
-	for _, step := range []func() error{m.makeBody, m.makeOutline, m.makeLabel} {
+	for _, step := range []func() error{m.makeInspection, m.makeBody, m.makeOutline, m.makeLabel} {
 		if err := step(); err != nil {
 			return nil, err
 		}
@@ -71,7 +73,7 @@ func makePart(j partJob) (*partMade, error) {
 	made.drawing = made.gear.Drawing()
 	made.warnings = m.warnings
 	made.document = sidecar.Gear(sidecar.Made{Program: program(), Input: j.input, Rack: j.rack, Gear: made.gear, Drawing: made.drawing,
-		Features: made.features, Kerf: made.kerf, Choices: made.choices, Warnings: m.warnings})
+		Features: made.features, Kerf: made.kerf, Choices: made.choices, Warnings: m.warnings, Inspection: made.inspection})
 	return made, nil
 }
 

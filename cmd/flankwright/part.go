@@ -40,7 +40,7 @@ func runPart(ctx context.Context, io streams, req request, params []parameter) e
 		return err
 	}
 	if out.from != "" {
-		defaults, err := readSidecar(out.from, req.command, params)
+		defaults, err := readSidecar(out.from, params, req.command)
 		if err != nil {
 			return err
 		}

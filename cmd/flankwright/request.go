@@ -69,8 +69,8 @@ func (r request) withDefaults(from request) request {
 // what this program writes, far below what would strain a machine.
 const largestSidecar = 16 << 20 // bytes
 
-// readSidecar takes the request out of a sidecar.
-func readSidecar(path, command string, params []parameter) (request, error) {
+// readSidecar takes the request out of a sidecar of one of the commands.
+func readSidecar(path string, params []parameter, commands ...string) (request, error) {
 	file, err := os.Open(path)
 	if err != nil {
 		return request{}, problems{{flag: "from", value: path, message: "cannot be read: " + reason(err), exit: exitFailed,
@@ -81,16 +81,16 @@ func readSidecar(path, command string, params []parameter) (request, error) {
 	if err != nil {
 		return request{}, problems{{flag: "from", value: path, message: "cannot be read: " + reason(err), exit: exitFailed}}
 	}
-	r, err := parseSidecar(data, command, params)
+	r, err := parseSidecar(data, params, commands...)
 	if err != nil {
 		return request{}, problems{{flag: "from", value: path, message: err.Error(), exit: exitMalformed,
-			hint: "give a sidecar that flankwright " + command + " wrote"}}
+			hint: "give a sidecar that flankwright " + commands[0] + " wrote"}}
 	}
 	return r, nil
 }
 
 // parseSidecar checks the document's schema and takes its input apart.
-func parseSidecar(data []byte, command string, params []parameter) (request, error) {
+func parseSidecar(data []byte, params []parameter, commands ...string) (request, error) {
 	if len(data) > largestSidecar {
 		return request{}, errors.New("the file is too large for a sidecar")
 	}
@@ -104,21 +104,22 @@ func parseSidecar(data []byte, command string, params []parameter) (request, err
 	if doc.Schema != sidecar.SchemaID {
 		return request{}, fmt.Errorf("not a sidecar: its schema is %q, not %q", doc.Schema, sidecar.SchemaID)
 	}
-	r := request{command: command, values: map[string][]string{}}
+	r := request{command: commands[0], values: map[string][]string{}}
 	for name, raw := range doc.Input {
 		values, err := inputValues(raw)
 		if err != nil {
 			return request{}, fmt.Errorf("input %q: %v", name, err)
 		}
 		if name == "command" {
-			if values[0] != command {
+			if !slices.Contains(commands, values[0]) {
 				return request{}, fmt.Errorf("the sidecar is of command %q", values[0])
 			}
+			r.command = values[0]
 			continue
 		}
 		known := slices.ContainsFunc(params, func(p parameter) bool { return p.name == name && !p.transient })
 		if !known {
-			return request{}, fmt.Errorf("input %q is no flag of %s", name, command)
+			return request{}, fmt.Errorf("input %q is no flag of %s", name, commands[0])
 		}
 		r.values[name] = values
 	}

@@ -88,7 +88,7 @@ func FuzzParseSidecar(f *testing.F) {
 	f.Add([]byte(`[]`))
 	params := partParameters("gear")
 	f.Fuzz(func(t *testing.T, data []byte) {
-		r, err := parseSidecar(data, "gear", params)
+		r, err := parseSidecar(data, params, "gear")
 		if err != nil {
 			return
 		}
@@ -143,7 +143,7 @@ func TestFromTakesItsOwnInput(t *testing.T) {
 	if code != exitDone {
 		t.Fatal(stderr)
 	}
-	r, err := parseSidecar([]byte(first), "gear", partParameters("gear"))
+	r, err := parseSidecar([]byte(first), partParameters("gear"), "gear")
 	if err != nil {
 		t.Fatal(err)
 	}

@@ -35,6 +35,7 @@ type partJob struct {
 	label     string
 	// labelHeight is in mm; 0 takes the largest that fits.
 	labelHeight float64
+	measuring   measuring
 	input       map[string]any
 }
 
@@ -53,6 +54,7 @@ func resolvePart(req request) (partJob, error) {
 	r.body(&j)
 	r.drawing(&j, inch)
 	r.cut(&j)
+	r.gauge(&j)
 	j.input = r.input
 	if r.found != nil {
 		return partJob{}, r.found

@@ -44,6 +44,8 @@ func printTable(out io.Writer, m *partMade) error {
 		return err
 	}
 	fmt.Fprintln(&b)
+	printInspection(&b, m)
+	fmt.Fprintln(&b)
 	for _, line := range m.reportLines() {
 		fmt.Fprintln(&b, line)
 	}

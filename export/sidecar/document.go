@@ -33,6 +33,7 @@ type Document struct {
 	Unit       string              `json:"unit"`
 	BasicRack  map[string]any      `json:"basic_rack"`
 	Dimensions map[string]any      `json:"dimensions"`
+	Inspection *Inspection         `json:"inspection"`
 	Outline    map[string]*Outline `json:"outline"`
 	Kerf       *Kerf               `json:"kerf,omitempty"`
 	Features   []Feature           `json:"features"`

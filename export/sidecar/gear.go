@@ -40,8 +40,10 @@ type Made struct {
 	Drawing  export.Drawing
 	Features []body.Feature
 	Kerf     *KerfReport // nil without a kerf
-	Choices  []Chosen
-	Warnings []profile.Finding
+
+	Inspection export.Inspection
+	Choices    []Chosen
+	Warnings   []profile.Finding
 }
 
 // Gear builds the document of a gear; files are added when their bytes are known.
@@ -67,6 +69,7 @@ func Gear(m Made) *Document {
 	for _, r := range export.DimensionRows(m.Gear.Tooth.Dimensions) {
 		doc.Dimensions[r.Key] = value(r.Value, r.Symbol, unit)
 	}
+	doc.Inspection = inspection(m.Inspection, unit, false)
 	for _, r := range m.Drawing.Report() {
 		o := outline(r, unit)
 		if r.Tolerance > 0 {

@@ -38,7 +38,7 @@ func TestBacklashOnTheCurves(t *testing.T) {
 // unshifted gears is what their teeth are thinned by.
 func TestBacklashOfThinning(t *testing.T) {
 	g, mate := must(t, gauge.OfTooth(tooth(t, "iso53-a", 2, 24, 0, 0))), must(t, gauge.OfTooth(tooth(t, "iso53-a", 2, 61, 0, 0)))
-	got, err := g.WithThickness(g.Thickness()-0.07).Backlash(mate, 85)
+	got, err := thicker(t, g, g.Thickness()-0.07).Backlash(mate, 85)
 	if err != nil {
 		t.Fatal(err)
 	}

@@ -87,127 +87,6 @@ func TestSpanRefusals(t *testing.T) {
 	finding(t, second(must(t, short).Spans()), gauge.RuleNoSpan)
 }
 
-// TestPinRefusals tries pins at both sides of both bounds, for every kind and reason.
-func TestPinRefusals(t *testing.T) {
-	for _, s := range someGears(t) {
-		g := must(t, s)
-		fits, err := g.PinRange()
-		if err != nil {
-			finding(t, err, gauge.RuleNoPin)
-			continue
-		}
-		const off = 1e-9 // relative
-		for _, d := range []float64{fits.Smallest, fits.Largest} {
-			if _, err := g.Pin(d); err != nil {
-				t.Errorf("%+v: bound %v: %v", s, d, err)
-			}
-		}
-		small := finding(t, second(g.Pin(fits.Smallest*(1-off))), gauge.RulePinTooSmall)
-		large := finding(t, second(g.Pin(fits.Largest*(1+off))), gauge.RulePinTooLarge)
-		if small.Bound.Value != fits.Smallest || large.Bound.Value != fits.Largest {
-			t.Errorf("bounds %v and %v of %v", small.Bound, large.Bound, fits)
-		}
-		p, err := g.Pin((fits.Smallest + fits.Largest) / 2)
-		if err != nil {
-			t.Fatal(err)
-		}
-		lower, upper := s.Form, s.TipForm
-		contact := p.Contact
-		if s.Kind != gauge.Rack {
-			contact /= 2
-		}
-		if contact < math.Min(lower, upper) || contact > math.Max(lower, upper) {
-			t.Errorf("%+v touches at %v", s, contact)
-		}
-	}
-	// The three reasons for which a pin is too small.
-	reasons := map[string]bool{}
-	for _, s := range append(someGears(t), plain(t), must2(t, 0.1)) {
-		g := must(t, s)
-		for share := 0.3; share < 1; share += 0.05 {
-			fits, err := g.PinRange()
-			if err != nil {
-				continue
-			}
-			f := finding(t, second(g.Pin(fits.Smallest*share)), gauge.RulePinTooSmall)
-			reasons[f.Text] = true
-		}
-	}
-	if len(reasons) != 3 {
-		t.Errorf("reasons: %v", reasons)
-	}
-	for _, d := range []float64{math.NaN(), math.Inf(1), 0, -1} {
-		if err := second(must(t, plain(t)).Pin(d)); err == nil {
-			t.Errorf("a pin of %v does", d)
-		}
-	}
-}
-
-// must2 is a gear whose flank reaches down nearly to a root that is not deep.
-func must2(t testing.TB, gap float64) gauge.Spec {
-	s := plain(t)
-	s.Root = s.Form - gap
-	return s
-}
-
-// TestStockPins compares with what handbooks take.
-func TestStockPins(t *testing.T) {
-	stock := func(g gauge.Gear, system gauge.System) float64 {
-		t.Helper()
-		d, err := g.StockPin(system)
-		if err != nil {
-			t.Fatal(err)
-		}
-		return d
-	}
-	near(t, "module 1, 20 teeth", stock(full(t, gauge.External, 1, 20, 20*degree, 0), gauge.Metric), 1.7, 0)
-	near(t, "4 P, 32 teeth", stock(full(t, gauge.External, inch/4, 32, 20*degree, 0), gauge.Inch), 0.432*inch, 1e-12)
-	long := gauge.OfTooth(tooth(t, "full-depth-20", inch/4, 12, 0.5, 0))
-	near(t, "long addendum pinion", stock(must(t, long), gauge.Inch), 0.48*inch, 1e-12) // 1.92/P
-	near(t, "4 P ring", stock(full(t, gauge.Ring, inch/4, 60, 20*degree, 0), gauge.Inch), 0.42*inch, 1e-12)
-	for _, s := range someGears(t) {
-		g := must(t, s)
-		for _, system := range []gauge.System{gauge.Metric, gauge.Inch} {
-			d, err := g.StockPin(system)
-			if err != nil {
-				finding(t, err, gauge.RuleNoPin)
-				continue
-			}
-			if _, err := g.Pin(d); err != nil {
-				t.Errorf("stock pin: %v", err)
-			}
-		}
-	}
-}
-
-// TestToleranceRounding checks the standard's steps and range.
-func TestToleranceRounding(t *testing.T) {
-	const um = 1e-3
-	got := gauge.Tolerances{SinglePitch: 4.949 * um, CumulativePitch: 4.951 * um, ProfileSlope: 5.24 * um, ProfileForm: 9.76 * um, ProfileTotal: 10.4 * um, Runout: 10.51 * um}.Rounded()
-	want := gauge.Tolerances{SinglePitch: 4.9 * um, CumulativePitch: 5 * um, ProfileSlope: 5 * um, ProfileForm: 10 * um, ProfileTotal: 10 * um, Runout: 11 * um}
-	for name, pair := range map[string][2]float64{"0.1 below": {got.SinglePitch, want.SinglePitch}, "0.1 above": {got.CumulativePitch, want.CumulativePitch},
-		"0.5": {got.ProfileSlope, want.ProfileSlope}, "0.5 up": {got.ProfileForm, want.ProfileForm}, "1 down": {got.ProfileTotal, want.ProfileTotal}, "1 up": {got.Runout, want.Runout}} {
-		near(t, name, pair[0], pair[1], 1e-15)
-	}
-	if _, err := gauge.FlankTolerances(1, 1000, 15000, 15); err != nil {
-		t.Error(err)
-	}
-	if _, err := gauge.FlankTolerances(11, 10, 5, 0.5); err != nil {
-		t.Error(err)
-	}
-	var all profile.Violations
-	if _, err := gauge.FlankTolerances(12, 4, 4.9, 71); !asViolations(err, &all) || len(all) != 4 {
-		t.Errorf("not all four are named: %v", err)
-	}
-	if _, err := gauge.FlankTolerances(0, 1001, math.NaN(), 0.4); !asViolations(err, &all) || len(all) != 4 {
-		t.Errorf("not all four are named: %v", err)
-	}
-	// A class is a factor of the square root of two.
-	one, _ := gauge.FlankTolerances(6, 20, 60, 3)
-	two, _ := gauge.FlankTolerances(8, 20, 60, 3)
-	near(t, "two classes", two.Runout, 2*one.Runout, 1e-15)
-}
-
 // TestScaling makes the same gear twice, once in another size: every length of it scales.
 func TestScaling(t *testing.T) {
 	const factor = inch // so that it is also that of inches and millimetres
@@ -262,5 +141,25 @@ func TestChordRefusals(t *testing.T) {
 		if _, err := g.ChordAt(h); err == nil {
 			t.Errorf("height %v is taken", h)
 		}
+	}
+}
+
+// TestWithThicknessRefusals leaves no tooth, no space, or no number.
+func TestWithThicknessRefusals(t *testing.T) {
+	g := must(t, plain(t))
+	for name, tc := range map[string]struct {
+		thickness float64
+		rule      profile.Rule
+	}{
+		"pointed":  {1, profile.RulePointedTip},
+		"no space": {6, gauge.RuleNoSpace},
+		"NaN":      {math.NaN(), profile.RuleNotFinite},
+	} {
+		if _, err := g.WithThickness(tc.thickness); reason(err) != tc.rule {
+			t.Errorf("%s: %v", name, err)
+		}
+	}
+	if _, err := g.SpanLimits(4, gauge.Allowance{Lower: -2.5}); reason(err) != profile.RulePointedTip {
+		t.Errorf("limits of no tooth: %v", err)
 	}
 }

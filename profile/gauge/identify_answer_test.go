@@ -184,6 +184,9 @@ func FuzzIdentify(f *testing.F) {
 	f.Add(28, 59.9, 4, 21.32, 5, 27.22, 0.0, 0.0, 0.03)
 	f.Add(28, 0.0, 4, 21.32, 4, 21.30, 3.5, 61.0, 0.03)
 	f.Add(3, 1e-9, 1, 1e300, 2, 5e-324, 1e-300, 1e9, 1e-12)
+	// Found by fuzzing: shifts beyond their limit.
+	f.Add(28, float64(74), 4, float64(2.368888888888889), 4, float64(64.80000000000001), float64(7), float64(47), float64(91.03))
+	f.Add(88, float64(218.66666666666666), 4, float64(58.36888888888889), 22, float64(120.3), float64(0.175), float64(7), float64(144.03))
 	f.Fuzz(func(t *testing.T, teeth int, tip float64, k1 int, w1 float64, k2 int, w2 float64, pin, over, u float64) {
 		m := gauge.Measurements{Teeth: teeth, TipDiameter: tip, Uncertainty: u, Spans: []gauge.SpanReading{{k1, w1}, {k2, w2}}}
 		if pin != 0 {
@@ -191,16 +194,14 @@ func FuzzIdentify(f *testing.F) {
 		}
 		id, err := gauge.Identify(m)
 		if err != nil {
-			if err.Error() == "" {
-				t.Error("an error without words")
-			}
+			described(t, err)
 			return
 		}
 		if id.Unique != (len(id.Results) == 1) || id.Unique != (id.Next == nil) {
 			t.Errorf("%+v", id)
 		}
 		for _, r := range id.Results {
-			if !(r.Misfit >= 0) || math.IsInf(r.Misfit, 0) || !(math.Abs(r.Shift) <= profile.MaxProfileShift+1) || !(r.Thinning >= 0) || !(r.Shortening >= 0) || !(r.ShiftMin <= r.ShiftMax+1e-9) {
+			if !(r.Misfit >= 0) || math.IsInf(r.Misfit, 0) || !(math.Abs(r.Shift) <= profile.MaxProfileShift+1e-9) || !(r.Thinning >= 0) || !(r.Shortening >= 0) || !(r.ShiftMin <= r.ShiftMax+1e-9) || !(r.Shift <= r.ShiftMax+1e-9) {
 				t.Errorf("%+v", r)
 			}
 			for _, e := range r.Residuals {

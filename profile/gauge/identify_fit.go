@@ -25,6 +25,9 @@ func (m Measurements) interval(c candidate, u float64) (low, high float64) {
 		keep(g.deltaOverPins(p.PinDiameter, p.Value-u), g.deltaOverPins(p.PinDiameter, p.Value+u))
 	}
 	least, most := m.shifts(c, u)
+	if least > most {
+		return math.Inf(1), math.Inf(-1)
+	}
 	keep(2*g.tan*least-MaxUnknownThinning*c.module, 2*g.tan*most)
 	if m.TipDiameter != 0 {
 		keep(g.flankReachesTip(m, u))
@@ -37,12 +40,16 @@ func (m Measurements) interval(c candidate, u float64) (low, high float64) {
 func (m Measurements) shifts(c candidate, u float64) (least, most float64) {
 	least, most = -profile.MaxProfileShift*c.module, profile.MaxProfileShift*c.module
 	if m.TipDiameter != 0 {
-		// x m - K with the tip as measured.
-		raised := m.TipDiameter/2 - c.module*(float64(m.Teeth)/2+c.addendum)
+		raised := m.raised(c)
 		least = math.Max(least, raised-u/2)
 		most = math.Min(most, raised+u/2+MaxUnknownShortening*c.module)
 	}
 	return least, most
+}
+
+// raised is x m - K in mm, the shift less the shortening, by the tip as measured.
+func (m Measurements) raised(c candidate) float64 {
+	return m.TipDiameter/2 - c.module*(float64(m.Teeth)/2+c.addendum)
 }
 
 // deltaOverPins is delta by a reading over pins; -Inf where the pin would have its
@@ -101,19 +108,17 @@ func (m Measurements) fit(c candidate, low, high float64) Result {
 	g := c.gear(m.Teeth, delta)
 	r := Result{Module: c.module, DiametralPitch: c.pitch, Preferred: c.preferred, PressureAngle: c.angle,
 		Addendum: c.addendum, Racks: c.racks(), teeth: m.Teeth, thickness: g.thickness}
-	plain := delta / (2 * g.tan) // x m without thinning
-	if m.TipDiameter != 0 {
-		// How far the tip stands above that of an unthinned, unshortened tooth.
-		proud := m.TipDiameter/2 - g.r - c.addendum*c.module - plain
-		if proud > 0 {
-			r.Thinning = math.Min(2*g.tan*proud, MaxUnknownThinning*c.module)
-		} else {
-			r.Shortening = math.Min(-proud, MaxUnknownShortening*c.module)
-		}
-	}
-	shift := plain + r.Thinning/(2*g.tan)
-	r.Shift = shift / c.module
 	least, most := m.shifts(c, m.Uncertainty)
+	plain := delta / (2 * g.tan) // x m without thinning
+	shift := math.Max(plain, least)
+	if m.TipDiameter != 0 {
+		raised := m.raised(c)
+		furthest := math.Min(plain+MaxUnknownThinning*c.module/(2*g.tan), most)
+		shift = math.Max(shift, math.Min(raised, furthest))
+		r.Shortening = math.Min(math.Max(shift-raised, 0), MaxUnknownShortening*c.module)
+	}
+	r.Thinning = 2 * g.tan * (shift - plain)
+	r.Shift = shift / c.module
 	r.ShiftMin = math.Max(least, low/(2*g.tan)) / c.module
 	r.ShiftMax = math.Min(most, (high+MaxUnknownThinning*c.module)/(2*g.tan)) / c.module
 	r.tip = g.r + c.addendum*c.module + shift - r.Shortening

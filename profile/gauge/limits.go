@@ -36,15 +36,17 @@ func (g Gear) limits(a Allowance, measure func(Gear) (float64, error)) (Limits, 
 	if found := g.checkAllowance(a); found != nil {
 		return Limits{}, found
 	}
-	thick, err := measure(g.WithThickness(g.thickness + a.Upper))
-	if err != nil {
-		return Limits{}, err
+	var ends [2]float64
+	for i, deviation := range []float64{a.Upper, a.Lower} {
+		made, err := g.WithThickness(g.thickness + deviation)
+		if err != nil {
+			return Limits{}, err
+		}
+		if ends[i], err = measure(made); err != nil {
+			return Limits{}, err
+		}
 	}
-	thin, err := measure(g.WithThickness(g.thickness + a.Lower))
-	if err != nil {
-		return Limits{}, err
-	}
-	return Limits{math.Min(thick, thin), math.Max(thick, thin)}, nil
+	return Limits{math.Min(ends[0], ends[1]), math.Max(ends[0], ends[1])}, nil
 }
 
 // checkAllowance refuses deviations in the wrong order or that leave no tooth.

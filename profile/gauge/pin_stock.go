@@ -24,9 +24,10 @@ const millimetresPerInch = 25.4
 //	1.728/P or 1.92/P; for a ring 1.44/P or 1.68/P
 //
 // (Van Keuren wire sizes, from memory; P = 25.4/m), whichever does and is nearer to the
-// ideal pin. Where neither does, and in millimetres, it is the nearest out of sets graded by 0.001 in, or by
-// 0.01 mm up to 1 mm, 0.1 mm up to 10 mm, 0.5 mm up to 20 mm and 1 mm above (common
-// practice, no source; DIN 2269 grades measuring pins but we do not quote its sizes).
+// ideal pin. Where neither does, and in millimetres, it is the nearest out of sets graded
+// by 0.001 in, or by 0.01 mm up to 1 mm, 0.1 mm up to 10 mm, 0.5 mm up to 20 mm and 1 mm
+// above (common practice, no source; DIN 2269 grades measuring pins, but its sizes are not
+// quoted here).
 func (g Gear) StockPin(system System) (float64, error) {
 	fits, found := g.pinRange()
 	if found != nil {

@@ -41,7 +41,7 @@ func (g Gear) FromSpan(k int, value float64) (Reading, error) {
 			return Reading{}, found
 		}
 	}
-	if _, err := g.WithThickness(thickness).Span(k); err != nil {
+	if _, err := g.withThickness(thickness).Span(k); err != nil {
 		return Reading{}, err
 	}
 	return g.reading(thickness), nil
@@ -59,7 +59,7 @@ func (g Gear) FromPins(diameter, value float64) (Reading, error) {
 	if found := g.checkReading(ParamMeasuredOverPins, value, thickness); found != nil {
 		return Reading{}, found
 	}
-	if _, err := g.WithThickness(thickness).Pin(diameter); err != nil {
+	if _, err := g.withThickness(thickness).Pin(diameter); err != nil {
 		return Reading{}, err
 	}
 	return g.reading(thickness), nil
@@ -91,7 +91,7 @@ func (g Gear) FromChord(height, chord float64) (Reading, error) {
 	if found := g.checkReading(ParamMeasuredChord, chord, thickness); found != nil {
 		return Reading{}, found
 	}
-	if _, err := g.WithThickness(thickness).ChordAt(height); err != nil {
+	if _, err := g.withThickness(thickness).ChordAt(height); err != nil {
 		return Reading{}, err
 	}
 	return g.reading(thickness), nil
@@ -113,7 +113,7 @@ func (g Gear) thicknessOfChord(height, chord float64) float64 {
 func (g Gear) checkReading(param profile.Param, value, thickness float64) profile.Violations {
 	// Not the thickness itself counts, which a large negative shift takes below zero,
 	// but what is left where the usable flank ends.
-	measured := g.WithThickness(thickness)
+	measured := g.withThickness(thickness)
 	low, high := g.flank()
 	if measured.halfTooth(g.along(g.spec.TipForm)) >= 0 && measured.halfSpace(low) > 0 && measured.halfSpace(high) > 0 {
 		return nil

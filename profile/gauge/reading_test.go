@@ -38,7 +38,7 @@ func TestReadingsInvertMeasurements(t *testing.T) {
 	for _, s := range someGears(t) {
 		g := must(t, s)
 		for _, deviation := range []float64{0, -0.08, 0.05} {
-			made := g.WithThickness(g.Thickness() + deviation)
+			made := thicker(t, g, g.Thickness()+deviation)
 			scale := math.Max(1, math.Abs(s.Tip))
 			check := func(what string, r gauge.Reading, err error) {
 				t.Helper()
@@ -121,7 +121,7 @@ func TestLimits(t *testing.T) {
 	a := gauge.Allowance{Upper: -0.04, Lower: -0.09}
 	for _, s := range someGears(t) {
 		g := must(t, s)
-		upper, lower := g.WithThickness(g.Thickness()+a.Upper), g.WithThickness(g.Thickness()+a.Lower)
+		upper, lower := thicker(t, g, g.Thickness()+a.Upper), thicker(t, g, g.Thickness()+a.Lower)
 		if spans, err := g.Spans(); err == nil {
 			k := spans[0].TeethSpanned
 			if l, err := g.SpanLimits(k, a); err == nil {

@@ -199,3 +199,13 @@ func tooth(t testing.TB, rack string, m float64, z int, x, thinning float64) *pr
 	}
 	return solved
 }
+
+// thicker is the gear with teeth of another thickness, which must be possible.
+func thicker(t testing.TB, g gauge.Gear, thickness float64) gauge.Gear {
+	t.Helper()
+	made, err := g.WithThickness(thickness)
+	if err != nil {
+		t.Fatal(err)
+	}
+	return made
+}

@@ -38,8 +38,9 @@ const (
 //	F_alphaT  = sqrt(f_HalphaT^2 + f_falphaT^2)
 //	F_rT      = 0.9 F_pT
 //
-// (clause 5, the runout from its annex; from memory), not rounded. The error is of type profile.Violations
-// and names what is outside the standard's range.
+// (clause 5, the runout from its annex; from memory), not rounded. The error is of type
+// profile.Violations and names what is outside the standard's range: classes 1 to 11, 5
+// to 1000 teeth, d from 5 to 15000 mm, m from 0.5 to 70 mm.
 func FlankTolerances(class, teeth int, referenceDiameter, module float64) (Tolerances, error) {
 	var found profile.Violations
 	add := func(param profile.Param, q profile.Quantity, low, high float64) {

@@ -1,0 +1,115 @@
+package main
+
+import (
+	"fmt"
+
+	"flankwright/export"
+	"flankwright/profile/gauge"
+)
+
+// makeInspection works out what the part is inspected by, and what readings mean.
+func (m *maker) makeInspection() error {
+	ask := m.job.measuring
+	d := m.tooth.Dimensions
+	if ask.series != "" {
+		allowance, err := gauge.AllowanceSeries(ask.series, d.ReferenceDiameter)
+		if err != nil {
+			return m.refuse(err)
+		}
+		ask.allowance = &allowance
+	}
+	system := gauge.Metric
+	if m.job.unit == export.Inch {
+		system = gauge.Inch
+	}
+	g, inspection, err := export.Inspect(m.tooth, system, ask.pin, ask.allowance)
+	m.made.inspection = inspection
+	if err != nil {
+		return m.refuse(err)
+	}
+	if ask.class != 0 {
+		tolerances, err := gauge.FlankTolerances(ask.class, d.Teeth, d.ReferenceDiameter, d.Module)
+		if err != nil {
+			return m.refuse(err)
+		}
+		rounded := tolerances.Rounded()
+		m.made.inspection.Class, m.made.inspection.ClassNumber = &rounded, ask.class
+	}
+	return m.readings(g)
+}
+
+// readings turns measured values into thicknesses.
+func (m *maker) readings(g gauge.Gear) error {
+	ask := m.job.measuring
+	add := func(name string, measured, nominal float64, r gauge.Reading, err error) error {
+		if err != nil {
+			return m.refuse(err)
+		}
+		entry := export.Reading{Name: name, Measured: measured, Nominal: nominal, Reading: r}
+		if ask.mateTeeth != 0 {
+			measured, err := g.WithThickness(r.Thickness)
+			if err != nil {
+				return m.refuse(err)
+			}
+			play, err := m.play(measured)
+			if err != nil {
+				return m.refuse(err)
+			}
+			entry.Backlash = &play
+		}
+		m.made.inspection.Readings = append(m.made.inspection.Readings, entry)
+		return nil
+	}
+	for _, s := range ask.spans {
+		r, err := g.FromSpan(s.TeethSpanned, s.Value)
+		nominal := 0.0
+		if err == nil {
+			var span gauge.Span
+			if span, err = g.Span(s.TeethSpanned); err == nil {
+				nominal = span.Value
+			}
+		}
+		if err := add(fmt.Sprintf("span over %d teeth", s.TeethSpanned), s.Value, nominal, r, err); err != nil {
+			return err
+		}
+	}
+	p, c := m.made.inspection.Pins, m.made.inspection.Chord
+	if p == nil && ask.overPins != nil || c == nil && ask.chords != nil {
+		m.refused = append(m.refused, m.made.inspection.Missing...)
+		return nil
+	}
+	if p != nil {
+		for _, v := range ask.overPins {
+			r, err := g.FromPins(p.Nominal.PinDiameter, v)
+			if err := add("over pins", v, p.Nominal.Value, r, err); err != nil {
+				return err
+			}
+		}
+	}
+	if c != nil {
+		for _, v := range ask.chords {
+			r, err := g.FromChord(c.Nominal.Height, v)
+			if err := add("chordal thickness", v, c.Nominal.Thickness, r, err); err != nil {
+				return err
+			}
+		}
+	}
+	return nil
+}
+
+// play is the backlash with a nominal mate.
+func (m *maker) play(g gauge.Gear) (gauge.Backlash, error) {
+	ask, s := m.job.measuring, m.job.spec
+	radius := s.Module * float64(ask.mateTeeth) / 2
+	tip := radius + s.Rack.Addendum
+	mate, err := gauge.New(gauge.Spec{Kind: gauge.External, Module: s.Module, Teeth: ask.mateTeeth, PressureAngle: s.Rack.PressureAngle,
+		Tip: tip, TipForm: tip, Form: radius})
+	if err != nil {
+		return gauge.Backlash{}, err
+	}
+	a := ask.centerDistance
+	if a == 0 {
+		a = radius + m.tooth.Dimensions.ReferenceDiameter/2
+	}
+	return g.Backlash(mate, a)
+}
