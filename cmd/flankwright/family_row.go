@@ -15,23 +15,26 @@ import (
 	"flankwright/export/sidecar"
 )
 
-// rowWriter makes rows and writes their files. It is used by all workers at once.
-type rowWriter struct {
+// rowMaker makes rows. It is used by all workers at once.
+type rowMaker struct {
 	*family
 	folder *files.Folder
-	gate   *gate     // nil unless the first bad row ends the run
 	memory sync.Pool // of *pages
 }
 
-// make makes one row.
-func (w *rowWriter) make(ctx context.Context, row tableRow) rowResult {
+// make makes one row, up to its bytes.
+func (w *rowMaker) make(row tableRow) rowResult {
 	r := rowResult{row: row}
 	memory, ok := w.memory.Get().(*pages)
 	if !ok {
 		memory = new(pages)
 	}
-	defer w.memory.Put(memory)
-	made, err := w.prepare(&r, memory)
+	set, err := w.prepare(&r, memory)
+	if err == nil && set != nil {
+		r.set, r.memory = set, memory
+		return r
+	}
+	w.memory.Put(memory)
 	if err != nil {
 		var found problems
 		if !errors.As(err, &found) {
@@ -39,28 +42,12 @@ func (w *rowWriter) make(ctx context.Context, row tableRow) rowResult {
 		}
 		r.found = w.placed(row, found)
 	}
-	if w.gate != nil && !w.gate.pass(ctx, row.Number, r.found == nil) {
-		r.stopped = r.found == nil || ctx.Err() != nil
-		return r
-	}
-	if ctx.Err() != nil {
-		r.stopped = true
-	}
-	if r.stopped || r.found != nil || r.skipped {
-		return r
-	}
-	r.listed, err = w.write(ctx, row, made, memory)
-	switch {
-	case err != nil && ctx.Err() != nil:
-		r.stopped = true
-	case err != nil:
-		r.err = setFailed(err)
-	}
 	return r
 }
 
-// prepare makes the drawing of a row, unless it is there already.
-func (w *rowWriter) prepare(r *rowResult, memory *pages) (*rendered, error) {
+// prepare makes the files of a row and what is listed of it; no files if they are there
+// already.
+func (w *rowMaker) prepare(r *rowResult, memory *pages) ([]files.File, error) {
 	if r.row.found != nil {
 		return nil, r.row.found
 	}
@@ -85,27 +72,20 @@ func (w *rowWriter) prepare(r *rowResult, memory *pages) (*rendered, error) {
 	if err != nil {
 		return nil, err
 	}
-	return &rendered{made.document, set}, nil
-}
-
-// rendered is a row as bytes, but for its sidecar.
-type rendered struct {
-	document *sidecar.Document
-	set      []files.File
-}
-
-// write writes the files of a row.
-func (w *rowWriter) write(ctx context.Context, row tableRow, made *rendered, memory *pages) (sidecar.FamilyRow, error) {
 	text, err := made.document.Append(memory.sidecar[:0])
 	if err != nil {
-		return sidecar.FamilyRow{}, err
+		return nil, err
 	}
 	memory.sidecar = text
-	own := files.File{Name: row.name + ".json", Data: text}
-	if err := w.folder.WriteSet(ctx, append(made.set, own)...); err != nil {
-		return sidecar.FamilyRow{}, err
-	}
-	return made.document.FamilyRow(row.Line, row.name, row.form.name, described(own)), nil
+	own := files.File{Name: r.row.name + ".json", Data: text}
+	r.listed = made.document.FamilyRow(r.row.Line, r.row.name, r.row.form.name, described(own))
+	return append(set, own), nil
+}
+
+// write writes the files of a row, and gives its memory back.
+func (w *rowMaker) write(ctx context.Context, r *rowResult) error {
+	defer w.memory.Put(r.memory)
+	return w.folder.WriteSet(ctx, r.set...)
 }
 
 // described is a file as sidecars and lists describe it.
@@ -116,7 +96,7 @@ func described(f files.File) sidecar.File {
 
 // standing says whether the files of a row are there: a sidecar of the same request and
 // program, and every file it tells of with the sum it tells.
-func (w *rowWriter) standing(row tableRow, j job) (listed sidecar.FamilyRow, ok bool) {
+func (w *rowMaker) standing(row tableRow, j job) (listed sidecar.FamilyRow, ok bool) {
 	text, err := w.read(row.name+".json", largestSidecar)
 	if err != nil {
 		return listed, false
@@ -138,7 +118,7 @@ func (w *rowWriter) standing(row tableRow, j job) (listed sidecar.FamilyRow, ok 
 }
 
 // read is a file of the folder, of at most so many bytes and one more.
-func (w *rowWriter) read(name string, most int) ([]byte, error) {
+func (w *rowMaker) read(name string, most int) ([]byte, error) {
 	file, err := w.folder.Open(name)
 	if err != nil {
 		return nil, err

@@ -15,11 +15,11 @@ import (
 // rowResult is what became of a row.
 type rowResult struct {
 	row     tableRow
+	set     []files.File // nil if the row could not be made, or was there already
+	memory  *pages       // of the set
 	listed  sidecar.FamilyRow
 	found   problems // why the row could not be made
 	skipped bool     // it was there already
-	stopped bool     // an earlier row was bad, or the run was interrupted
-	err     error    // output failed: no row after it can do better
 }
 
 // tally counts what became of the rows.
@@ -28,7 +28,7 @@ type tally struct{ written, skipped, failed int }
 // garbagePercent lets the heap grow to several times what lives: rows leave large
 // buffers behind and little else, so that collecting them often would cost a tenth of
 // the time.
-const garbagePercent = 400
+const garbagePercent = 800
 
 // run makes the rows and lists them. The lists are written last.
 func (f *family) run(ctx context.Context, io streams) error {
@@ -93,9 +93,6 @@ func (f *family) makeRows(ctx context.Context, out streams, folder *files.Folder
 	if err != nil {
 		return t, nil, err
 	}
-	// Whatever ends the run early, workers in hand stop writing.
-	ctx, cancel := context.WithCancel(ctx)
-	defer cancel()
 	var tableErr error
 	next := func() (tableRow, bool) {
 		for ctx.Err() == nil {
@@ -104,7 +101,7 @@ func (f *family) makeRows(ctx context.Context, out streams, folder *files.Folder
 			case err == io.EOF:
 				return tableRow{}, false
 			case err != nil:
-				tableErr = f.source.failed(err)
+				tableErr = err
 				return tableRow{}, false
 			case f.shard.takes(row.Number):
 				return f.read(row), true
@@ -112,14 +109,9 @@ func (f *family) makeRows(ctx context.Context, out streams, folder *files.Folder
 		}
 		return tableRow{}, false
 	}
-	w := &rowWriter{family: f, folder: folder}
-	if f.stopOnError {
-		w.gate = newGate(f.shard.i, f.shard.n)
-	}
-	ordered(f.workers, next, func(r tableRow) rowResult { return w.make(ctx, r) }, func(r rowResult) bool {
-		if r.stopped || r.err != nil {
-			err = r.err
-			cancel()
+	w := &rowMaker{family: f, folder: folder}
+	ordered(f.workers, next, w.make, func(r rowResult) bool {
+		if ctx.Err() != nil {
 			return false
 		}
 		switch {
@@ -130,6 +122,10 @@ func (f *family) makeRows(ctx context.Context, out streams, folder *files.Folder
 		case r.skipped:
 			t.skipped++
 		default:
+			// Nothing of a row stands under its name if its files could not all be written.
+			if err = w.write(ctx, &r); err != nil {
+				return false
+			}
 			t.written++
 		}
 		if !f.quiet && r.listed.Warnings != nil {
@@ -139,14 +135,11 @@ func (f *family) makeRows(ctx context.Context, out streams, folder *files.Folder
 			}
 		}
 		progress.show(t)
-		if err = lists.add(r.listed); err != nil {
-			cancel()
-			return false
-		}
-		return r.found == nil || !f.stopOnError
+		err = lists.add(r.listed)
+		return err == nil && (r.found == nil || !f.stopOnError)
 	})
-	if err == nil {
-		err = tableErr
+	if err == nil && tableErr != nil {
+		err = f.source.failed(tableErr)
 	}
 	if err == nil && ctx.Err() == nil && (bad == nil || !f.stopOnError) && [32]byte(f.source.sum.Sum(nil)) != f.digest {
 		err = problems{{message: "the table " + f.source.name + " changed while it was read", hint: "run again when nothing else writes to it", exit: exitFailed}}

@@ -29,17 +29,13 @@ const millimetresPerInch = 25.4
 // above (common practice, no source; DIN 2269 grades measuring pins, but its sizes are not
 // quoted here).
 func (g Gear) StockPin(system System) (float64, error) {
-	fits, found := g.pinRange()
-	if found != nil {
-		return 0, found
-	}
 	ideal, err := g.IdealPin()
 	if err != nil {
 		return 0, err
 	}
 	best := 0.0
 	offer := func(d float64) {
-		if d >= fits.Smallest && d <= fits.Largest && (best == 0 || math.Abs(d-ideal) < math.Abs(best-ideal)) {
+		if (best == 0 || math.Abs(d-ideal) < math.Abs(best-ideal)) && g.does(d) {
 			best = d
 		}
 	}
@@ -56,6 +52,10 @@ func (g Gear) StockPin(system System) (float64, error) {
 		}
 	}
 	if best == 0 {
+		fits, found := g.pinRange()
+		if found != nil {
+			return 0, found
+		}
 		return 0, profile.Violations{{Rule: RuleNoPin, Param: ParamPinDiameter, Value: profile.LengthOf(fits.Smallest).AtLeast(), Bound: profile.LengthOf(fits.Largest).AtMost(),
 			Text: "no pin of the stock sizes lies between {value} and {bound}, which do",
 			Hint: "give one of those with --pin-diameter"}}

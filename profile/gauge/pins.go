@@ -32,6 +32,9 @@ func (g Gear) Pin(diameter float64) (Pins, error) {
 	if found := positive(ParamPinDiameter, diameter); found != nil {
 		return Pins{}, found
 	}
+	if g.does(diameter) {
+		return g.pins(diameter), nil
+	}
 	fits, found := g.pinRange()
 	if found != nil {
 		return Pins{}, found
@@ -64,11 +67,15 @@ func (g Gear) PinRange() (PinRange, error) {
 // Technology, table 10-13, from memory, with eta of the thinned tooth). Where no
 // such pin does, it is the nearest that does.
 func (g Gear) IdealPin() (float64, error) {
+	ideal := g.pinAt(g.working())
+	if g.does(ideal) {
+		return ideal, nil
+	}
 	fits, found := g.pinRange()
 	if found != nil {
 		return 0, found
 	}
-	return math.Min(math.Max(g.pinAt(g.working()), fits.Smallest), fits.Largest), nil
+	return math.Min(math.Max(ideal, fits.Smallest), fits.Largest), nil
 }
 
 // working is the circle of contact of the ideal pin, kept on the usable flank.
@@ -173,13 +180,24 @@ func (g Gear) clear(diameter float64) float64 {
 	return g.sign()*(g.centerRadius(diameter)-g.spec.Root) - diameter/2
 }
 
-// pinRange is PinRange with the kind of error a caller can add to.
-func (g Gear) pinRange() (PinRange, profile.Violations) {
-	smallest := g.pinAt(g.along(g.spec.Form))
-	largest := g.pinAt(g.along(g.spec.TipForm))
+// does says whether a pin does, without looking for the smallest and largest that do.
+func (g Gear) does(diameter float64) bool {
+	smallest, largest := g.flankPins()
+	return diameter >= smallest && diameter <= largest && g.proud(diameter) > 0 && g.clear(diameter) > 0
+}
+
+// flankPins are the pins that touch at the ends of the usable flank.
+func (g Gear) flankPins() (smallest, largest float64) {
+	smallest, largest = g.pinAt(g.along(g.spec.Form)), g.pinAt(g.along(g.spec.TipForm))
 	if g.spec.Kind == External {
 		largest = math.Min(largest, 2*g.spec.Tip) // no pin is thicker than the gear
 	}
+	return smallest, largest
+}
+
+// pinRange is PinRange with the kind of error a caller can add to.
+func (g Gear) pinRange() (PinRange, profile.Violations) {
+	smallest, largest := g.flankPins()
 	none := profile.Violations{{Rule: RuleNoPin, Param: ParamPinDiameter, Value: profile.LengthOf(largest), Bound: g.size(g.spec.Tip),
 		Text: "no pin touches the usable flank and stands proud of the tip circle at {bound}: even one of {value} does not",
 		Hint: "measure a span or a chord"}}
