@@ -57,9 +57,10 @@ func (t *Tooth) Beam(width float64) (*Beam, error) {
 // beam is Beam without the words; false where the beam does not reach the form circle.
 func (t *Tooth) beam(width float64) (*Beam, bool) {
 	d := width / 2
-	b := &Beam{Width: width, Outline: Outline{Teeth: t.Teeth, LandSmooth: true,
-		Land: t.Land.Parallel(d).(CircleArc)}}
-	heading := t.Land.Heading(t.Land.To)
+	b := &Beam{Width: width, Outline: Outline{Form: t.Form, Teeth: t.Teeth, Advance: t.Advance, LandSmooth: true,
+		Land: t.Land.Parallel(d)}}
+	_, landEnd := t.Land.Domain()
+	heading := t.Land.Heading(landEnd)
 	corner := !t.LandSmooth
 	at := End(t.Land)
 	for i, p := range t.Side {
@@ -147,7 +148,7 @@ func (t *Tooth) beamRoot(b *Beam, exact Fillet, d float64) bool {
 	b.Side = append(b.Side, Piece{Part: PartFillet, Curve: f, SmoothEnd: !cut})
 	if t.Root != nil || cut {
 		from := math.Pi/2 + f.halfAngle(f.To)
-		b.Root = &CircleArc{Radius: bottom, From: from, To: math.Pi + 2*middle - from}
+		b.Root = CircleArc{Radius: bottom, From: from, To: math.Pi + 2*middle - from}
 	}
 	if cut {
 		b.Leftovers = t.left(exact, f, false)
@@ -171,8 +172,11 @@ func (t *Tooth) left(exact, f Fillet, inMiddle bool) []Leftover {
 	}
 	search(func(u float64) float64 { return judge(exact.At(f.To + u*(exact.To-f.To))) })
 	// The disc touches the root circle below its center.
-	if touch := math.Pi/2 + polarAngle(disc); t.Root != nil && touch > t.Root.From {
-		search(func(u float64) float64 { return judge(t.Root.At(t.Root.From + u*(touch-t.Root.From))) })
+	if t.Root != nil {
+		from, _ := t.Root.Domain()
+		if touch := math.Pi/2 + polarAngle(disc); touch > from {
+			search(func(u float64) float64 { return judge(t.Root.At(from + u*(touch-from))) })
+		}
 	}
 	if inMiddle {
 		return []Leftover{worst}

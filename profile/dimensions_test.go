@@ -129,10 +129,11 @@ func TestDimensionsMatchCurves(t *testing.T) {
 		check("form diameter", 2*norm(profile.End(flank)), d.FormDiameter)
 		check("form diameter of the fillet", 2*norm(profile.Start(fillet)), d.FormDiameter)
 		check("root diameter", 2*norm(profile.End(fillet)), d.RootDiameter)
+		land := tooth.Land.(profile.CircleArc)
 		check("tip diameter", 2*norm(profile.Start(tooth.Land)), d.TipDiameter)
-		check("land", tooth.Land.Radius*(tooth.Land.To-tooth.Land.From), d.TipLand)
+		check("land", land.Radius*(land.To-land.From), d.TipLand)
 		if tooth.Root != nil {
-			check("root circle", 2*tooth.Root.Radius, d.RootDiameter)
+			check("root circle", 2*tooth.Root.(profile.CircleArc).Radius, d.RootDiameter)
 		}
 		// The thickness is the arc between the flanks, found on the exact curve.
 		on := func(diameter float64) float64 {

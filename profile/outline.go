@@ -1,33 +1,71 @@
 package profile
 
-import "math"
+import (
+	"math"
 
-// Outline is an outline of equal teeth about the origin as exact curves: one tooth,
-// centered on +Y, whose other side is a mirror image. The part's edge is one, and so is
-// the path of a beam's middle beside it.
+	"gonum.org/v1/gonum/spatial/r2"
+)
+
+// Outline is a toothed edge as exact curves: one tooth, centered on +Y, whose other side
+// is a mirror image, and its repetitions. The part's edge is one, and so is the path of a
+// beam's middle beside it.
+//
+// Of a gear it is a tooth and turns about the axis; of a ring it is a space, which is the
+// tooth of an external gear with the opposite shift, with the material outside; of a rack
+// it is a tooth that repeats along the datum line. All are travelled with the next
+// repetition ahead: counter-clockwise, or towards -X.
 type Outline struct {
+	Form  Form
 	Teeth int
-	// Land is the whole tip land, from the right corner to the left one.
-	Land CircleArc
+	// Advance is the pitch of a rack in mm; 0 for the others.
+	Advance float64
+	// Land is the whole land from the right corner to the left one: of a gear or rack the
+	// tip land, of a ring the root land.
+	Land Curve
 	// LandSmooth says that Side starts in the direction Land ends in.
 	LandSmooth bool
-	// Side is the left side from the end of the land to the root: rounding or chamfer
-	// if any, flank, fillet if it has any length.
+	// Side is the left side from the end of the land on: of a gear or rack rounding or
+	// chamfer if any, flank, fillet if it has any length; of a ring the other way round.
 	Side []Piece
-	// Root is the whole root arc from this tooth's fillet to the next one's, nil where
-	// the two fillets meet.
-	Root *CircleArc
+	// Root is what lies between this Side and the next repetition's, nil where they meet.
+	Root Curve
 }
 
-// Pitch is the angle from one tooth to the next, in rad.
-func (o Outline) Pitch() float64 { return 2 * math.Pi / float64(o.Teeth) }
-
-// Depth is the depth of the teeth in mm, from the land to the root.
-func (o Outline) Depth() float64 {
-	root := o.Land.Radius
-	if n := len(o.Side); n > 0 {
-		end := End(o.Side[n-1].Curve)
-		root = math.Hypot(end.X, end.Y)
+// Pitch is the angle from one tooth to the next, in rad; 0 for a rack.
+func (o Outline) Pitch() float64 {
+	if o.Form == FormRack {
+		return 0
 	}
-	return o.Land.Radius - root
+	return 2 * math.Pi / float64(o.Teeth)
+}
+
+// Step is the way from the tooth to its n-th repetition, and a turn of all of it about
+// the origin in rad; n need not be whole.
+func (o Outline) Step(n, turn float64) func(r2.Vec) r2.Vec {
+	if o.Form != FormRack {
+		return r2.NewRotation(turn+n*o.Pitch(), r2.Vec{}).Rotate
+	}
+	move, rotate := r2.Vec{X: -n * o.Advance}, r2.NewRotation(turn, r2.Vec{}).Rotate
+	return func(p r2.Vec) r2.Vec { return rotate(r2.Add(p, move)) }
+}
+
+// Between is the point as high as p in the middle between the tooth and its next
+// repetition.
+func (o Outline) Between(p r2.Vec) r2.Vec { return o.Step(0.5, 0)(r2.Vec{Y: o.height(p)}) }
+
+// height is a point's distance from the axis, or its height over the datum line.
+func (o Outline) height(p r2.Vec) float64 {
+	if o.Form == FormRack {
+		return p.Y
+	}
+	return math.Hypot(p.X, p.Y)
+}
+
+// Depth is the depth of the teeth in mm, from the land to the end of a side.
+func (o Outline) Depth() float64 {
+	land := o.height(Start(o.Land))
+	if n := len(o.Side); n > 0 {
+		return land - o.height(End(o.Side[n-1].Curve))
+	}
+	return 0
 }

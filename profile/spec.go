@@ -17,9 +17,20 @@ const (
 	ThinByInfeed
 )
 
+// Form says which kind of teeth a Spec asks for.
+type Form uint8
+
+// The forms.
+const (
+	FormGear Form = iota // external gear
+	FormRing             // internal gear
+	FormRack             // straight rack
+)
+
 // Spec is what a gear is asked to be. Lengths are mm, angles rad; profile shift
 // is in modules and counts positive where it thickens the tooth (ISO 21771).
 type Spec struct {
+	Form         Form
 	Module       float64 // mm
 	Teeth        int
 	Rack         BasicRack

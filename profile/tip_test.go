@@ -142,7 +142,7 @@ func TestTipChamfer(t *testing.T) {
 				t.Fatalf("z = %d: %+v", z, tooth.Side[0])
 			}
 			slack := rounding * tooth.Dimensions.TipDiameter
-			near(t, "along the tip circle", (sharp.Land.To-tooth.Land.To)*tooth.Land.Radius, c, slack)
+			near(t, "along the tip circle", (sharp.Land.(profile.CircleArc).To-tooth.Land.(profile.CircleArc).To)*tooth.Land.(profile.CircleArc).Radius, c, slack)
 			near(t, "start", norm(line.A), tooth.Dimensions.TipDiameter/2, slack)
 			// The flank's length from the corner, by many short chords.
 			flank := flankOf(t, sharp)

@@ -84,6 +84,6 @@ func (t *Tooth) assemble(g generation, tp tip, r root) {
 	if g.w > 0 {
 		half := g.w / g.r
 		middle := math.Pi/2 + g.space
-		t.Root = &CircleArc{Radius: g.rootRadius(), From: middle - half, To: middle + half}
+		t.Root = CircleArc{Radius: g.rootRadius(), From: middle - half, To: middle + half}
 	}
 }

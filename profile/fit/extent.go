@@ -4,6 +4,8 @@ package fit
 type Extent struct {
 	Kind  ExtentKind
 	Teeth int // of ExtentTeeth
+	// HalfTeeth has a whole rack end in the middle of teeth in place of spaces.
+	HalfTeeth bool
 }
 
 // ExtentKind names the extents.

@@ -18,7 +18,7 @@ func Loop(pieces []profile.Piece, o Options, turn float64) (Path, float64) {
 	}
 	o.Tolerance -= pointRounding
 	rotate := r2.NewRotation(turn, r2.Vec{}).Rotate
-	var c chain
+	c := chain{of: &Tooth{exact: profile.Outline{Teeth: 1}}} // no repetition
 	worst := 0.0
 	for _, p := range pieces {
 		if from, to := p.Curve.Domain(); math.Abs(to-from)*p.Curve.Speed((from+to)/2) < ShortestSegment {

@@ -4,58 +4,119 @@ import (
 	"math"
 
 	"gonum.org/v1/gonum/spatial/r2"
+
+	"flankwright/profile"
 )
 
-// Outline is the outline of that extent, counter-clockwise about the origin, turned by
-// turn in rad. A whole outline starts in the middle of the land of tooth 1, the place
-// where a closing segment harms least.
+// Outline is the edge of that extent, turned by turn in rad about the origin, with the
+// material on the left for a gear or rack, on the right for a ring. The whole outline of
+// a gear or ring is closed and starts in the middle of a land, the place where a closing
+// segment harms least; that of a rack is an open chain, which Rack closes.
+//
+// Tooth 1 is on +Y. A ring's outline is one of spaces, which stand half a pitch beside
+// its teeth; a rack's teeth follow each other towards +X, against the way of travel.
 func (f *Tooth) Outline(e Extent, turn float64) Path {
-	right := f.rightSide()
-	landBefore, landAfter := halves(f.Land)
-	rootBefore, rootAfter := halves(f.Root)
-	c := chain{turn: turn, pitch: f.pitch}
-	c.segments = make([]Segment, 0, f.teeth*(len(f.Land)+2*len(f.Side)+len(f.Root))+1)
-	switch e.Kind {
-	case ExtentSpace:
-		c.add(0, landAfter, f.Side, f.Root, right)
-		c.add(1, landBefore)
-	case ExtentTeeth:
-		c.add(-1, rootAfter, right)
-		for i := range e.Teeth - 1 {
-			c.add(i, f.Land, f.Side, f.Root, right)
-		}
-		c.add(e.Teeth-1, f.Land, f.Side, rootBefore)
+	teeth, spaces := f.span(e)
+	c := f.chain(turn, teeth+spaces)
+	switch {
+	case teeth > 0:
+		c.overTeeth(f.first(teeth, e), teeth)
 	default:
-		c.add(0, landAfter, f.Side, f.Root, right)
-		for i := 1; i < f.teeth; i++ {
-			c.add(i, f.Land, f.Side, f.Root, right)
-		}
-		c.add(f.teeth, landBefore)
+		c.overSpaces(f.first(spaces, e), spaces)
+	}
+	closed := !e.Partial() && f.exact.Form != profile.FormRack
+	if closed {
 		c.segments[len(c.segments)-1].End = c.segments[0].Start
 	}
-	return Path{Segments: c.segments, Closed: !e.Partial()}
+	return Path{Segments: c.segments, Closed: closed}
+}
+
+// span says over how many repetitions an extent goes: from root middle to root middle, or
+// from land middle to land middle.
+func (f *Tooth) span(e Extent) (teeth, spaces int) {
+	ring, rack := f.exact.Form == profile.FormRing, f.exact.Form == profile.FormRack
+	switch {
+	case e.Kind == ExtentSpace && ring:
+		return 1, 0
+	case e.Kind == ExtentSpace:
+		return 0, 1
+	case e.Kind == ExtentTeeth && ring:
+		return 0, e.Teeth
+	case e.Kind == ExtentTeeth:
+		return e.Teeth, 0
+	case rack && !e.HalfTeeth:
+		return f.exact.Teeth, 0
+	}
+	return 0, f.exact.Teeth
+}
+
+// first is the repetition an extent begins with.
+func (f *Tooth) first(n int, e Extent) float64 {
+	switch f.exact.Form {
+	case profile.FormRing:
+		if e.Kind == ExtentSpace {
+			return 0.5
+		}
+		return -0.5
+	case profile.FormRack:
+		if teeth, _ := f.span(e); teeth > 0 {
+			return float64(1 - n)
+		}
+		return float64(-n)
+	}
+	return 0
 }
 
 // chain gathers segments, each starting in the very point where the one before ends.
 type chain struct {
-	turn, pitch float64
-	segments    []Segment
+	of       *Tooth
+	right    []Segment
+	turn     float64
+	segments []Segment
 }
 
-// add appends lists turned by so many pitches.
-func (c *chain) add(pitches int, lists ...[]Segment) {
-	rotate := r2.NewRotation(c.turn+float64(pitches)*c.pitch, r2.Vec{}).Rotate
+// chain is an empty chain, with room for so many repetitions.
+func (f *Tooth) chain(turn float64, repetitions int) chain {
+	room := (repetitions+1)*(len(f.Land)+2*len(f.Side)+len(f.Root)) + 2
+	return chain{of: f, right: f.rightSide(), turn: turn, segments: make([]Segment, 0, room)}
+}
+
+// overTeeth adds n teeth from root middle to root middle.
+func (c *chain) overTeeth(first float64, n int) {
+	f := c.of
+	before, after := halves(f.Root)
+	c.add(first-1, after, c.right)
+	for i := range n - 1 {
+		c.add(first+float64(i), f.Land, f.Side, f.Root, c.right)
+	}
+	c.add(first+float64(n-1), f.Land, f.Side, before)
+}
+
+// overSpaces adds n spaces from land middle to land middle.
+func (c *chain) overSpaces(first float64, n int) {
+	f := c.of
+	before, after := halves(f.Land)
+	c.add(first, after, f.Side, f.Root, c.right)
+	for i := 1; i < n; i++ {
+		c.add(first+float64(i), f.Land, f.Side, f.Root, c.right)
+	}
+	c.add(first+float64(n), before)
+}
+
+// add appends lists moved by so many repetitions.
+func (c *chain) add(step float64, lists ...[]Segment) {
+	place := c.of.exact.Step(step, c.turn)
 	for _, list := range lists {
 		for i := range list {
 			s := &list[i]
-			m := Segment{Kind: s.Kind, End: rotate(s.End), Bulge: s.Bulge}
+			m := Segment{Kind: s.Kind, End: place(s.End), Bulge: s.Bulge}
 			if n := len(c.segments); n > 0 {
 				m.Start = c.segments[n-1].End
 			} else {
-				m.Start = rotate(s.Start)
+				m.Start = place(s.Start)
 			}
 			if s.Kind == Cubic {
-				m.C1, m.C2 = rotate(s.C1), rotate(s.C2)
+				m.C1, m.C2 = place(s.C1), place(s.C2)
 			}
 			c.segments = append(c.segments, m)
 		}
@@ -65,10 +126,10 @@ func (c *chain) add(pitches int, lists ...[]Segment) {
 // rightSide is the right side of the next tooth, from its root to its land: the mirror
 // image of Side, reversed.
 func (f *Tooth) rightSide() []Segment {
-	rotate := r2.NewRotation(f.pitch, r2.Vec{}).Rotate
+	next := f.exact.Step(1, 0)
 	right := make([]Segment, 0, len(f.Side))
 	for i := len(f.Side) - 1; i >= 0; i-- {
-		right = append(right, f.Side[i].Mapped(mirrored, true).Reversed().Mapped(rotate, false))
+		right = append(right, f.Side[i].Mapped(mirrored, true).Reversed().Mapped(next, false))
 	}
 	return right
 }

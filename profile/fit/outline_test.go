@@ -153,7 +153,7 @@ func check5Integrals(t *testing.T, name string, tooth *profile.Tooth, o Path, to
 		curves = append(curves, p.Curve, p.Curve) // both sides have the same integrals
 	}
 	if tooth.Root != nil {
-		curves = append(curves, *tooth.Root)
+		curves = append(curves, tooth.Root)
 	}
 	area, length := 0.0, 0.0
 	for _, c := range curves {

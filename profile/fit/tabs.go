@@ -11,22 +11,21 @@ import (
 // between them, counter-clockwise. A gap must be narrower than the land (LandWidth) and
 // there must be fewer tabs than teeth.
 func (f *Tooth) TabbedOutline(tabs int, gap, turn float64) []Path {
-	right := f.rightSide()
 	landBefore, landAfter := parted(f.Land, (total(f.Land)-gap)/2), parted(reversed(f.Land), (total(f.Land)-gap)/2)
 	after := reversed(landAfter)
-	at := tabTeeth(f.teeth, tabs)
+	at := tabTeeth(f.exact.Teeth, tabs)
 	var paths []Path
 	for i, tooth := range at {
-		next := f.teeth + at[0]
+		next := f.exact.Teeth + at[0]
 		if i+1 < len(at) {
 			next = at[i+1]
 		}
-		c := chain{turn: turn, pitch: f.pitch}
-		c.add(tooth, after, f.Side, f.Root, right)
+		c := f.chain(turn, next-tooth)
+		c.add(float64(tooth), after, f.Side, f.Root, c.right)
 		for k := tooth + 1; k < next; k++ {
-			c.add(k, f.Land, f.Side, f.Root, right)
+			c.add(float64(k), f.Land, f.Side, f.Root, c.right)
 		}
-		c.add(next, landBefore)
+		c.add(float64(next), landBefore)
 		paths = append(paths, Path{Segments: c.segments})
 	}
 	return paths

@@ -5,6 +5,8 @@ import (
 	"testing"
 
 	"gonum.org/v1/gonum/spatial/r2"
+
+	"flankwright/profile"
 )
 
 // TestTabs: the chains and gaps make up the whole outline, gaps lie in the middle of
@@ -24,7 +26,7 @@ func TestTabs(t *testing.T) {
 				for i, p := range paths {
 					length += p.Length()
 					end, start := p.Segments[len(p.Segments)-1].End, paths[(i+1)%len(paths)].Segments[0].Start
-					tip := tooth.Land.Radius
+					tip := tooth.Land.(profile.CircleArc).Radius
 					const drawnTo = 2e-3 // of the tip circle, with chords
 					if math.Abs(r2.Norm(end)-tip) > drawnTo || math.Abs(r2.Norm(start)-tip) > drawnTo {
 						t.Errorf("%s: a gap is not on a land", name)

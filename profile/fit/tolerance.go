@@ -57,7 +57,7 @@ func checkCount(t profile.Outline, o Options) error {
 		need += 2 * count(p.Curve)
 	}
 	if t.Root != nil {
-		need += count(*t.Root)
+		need += count(t.Root)
 	}
 	need *= float64(t.Teeth)
 	if need <= MostSegments {

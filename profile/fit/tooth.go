@@ -26,8 +26,7 @@ type Tooth struct {
 	Land, Side, Root []Segment
 	Tolerance        float64 // mm, as asked
 	Deviation        float64 // mm, largest distance found between drawn and exact curve, before rounding
-	pitch            float64 // rad, from one tooth to the next
-	teeth            int
+	exact            profile.Outline
 	// The least numbers of arcs that could draw land, side and root.
 	landLimit, sideLimit, rootLimit int
 }
@@ -41,7 +40,7 @@ func NewTooth(t profile.Outline, o Options) (*Tooth, error) {
 	if err := checkCount(t, o); err != nil {
 		return nil, err
 	}
-	f := &Tooth{Tolerance: o.Tolerance, pitch: t.Pitch(), teeth: t.Teeth}
+	f := &Tooth{Tolerance: o.Tolerance, exact: t}
 	o.Tolerance -= pointRounding
 	f.Land, f.landLimit = f.draw(t.Land, o, ends{})
 	smooth := t.LandSmooth
@@ -52,7 +51,7 @@ func NewTooth(t profile.Outline, o Options) (*Tooth, error) {
 		smooth = p.SmoothEnd
 	}
 	if t.Root != nil {
-		f.Root, f.rootLimit = f.draw(*t.Root, o, ends{})
+		f.Root, f.rootLimit = f.draw(t.Root, o, ends{})
 	}
 	f.absorbShort(t)
 	f.link()
@@ -87,13 +86,15 @@ func (f *Tooth) draw(c profile.Curve, o Options, e ends) (segments []Segment, li
 // ArcLimit is the least number of tangent-continuous arcs that could draw the extent
 // within the tolerance.
 func (f *Tooth) ArcLimit(e Extent) int {
-	switch e.Kind {
-	case ExtentSpace:
-		return 2*f.landLimit + 2*f.sideLimit + f.rootLimit
-	case ExtentTeeth:
-		return e.Teeth*(f.landLimit+2*f.sideLimit) + (e.Teeth+1)*f.rootLimit
+	teeth, spaces := f.span(e)
+	sides := 2 * f.sideLimit
+	switch {
+	case teeth > 0:
+		return teeth*(f.landLimit+sides) + (teeth+1)*f.rootLimit
+	case e.Partial():
+		return (spaces+1)*f.landLimit + spaces*(sides+f.rootLimit)
 	}
-	return f.teeth * (f.landLimit + 2*f.sideLimit + f.rootLimit)
+	return spaces * (f.landLimit + sides + f.rootLimit)
 }
 
 // absorbShort removes segments shorter than ShortestSegment; a neighbour takes
@@ -116,19 +117,23 @@ func (f *Tooth) absorbShort(t profile.Outline) {
 	f.Side = kept
 	if total(f.Land) < ShortestSegment {
 		f.Deviation = math.Max(f.Deviation, total(f.Land)/2)
-		f.Side[0].Start = r2.Vec{Y: t.Land.Radius}
+		f.Side[0].Start = middleOf(t.Land)
 		f.Land = nil
 	}
 	if total(f.Root) < ShortestSegment {
-		middle := math.Pi/2 + f.pitch/2
 		last := &f.Side[len(f.Side)-1]
 		if f.Root != nil {
 			f.Deviation = math.Max(f.Deviation, total(f.Root)/2)
 		}
-		radius := r2.Norm(last.End)
-		last.End = r2.Vec{X: radius * math.Cos(middle), Y: radius * math.Sin(middle)}
+		last.End = t.Between(last.End)
 		f.Root = nil
 	}
+}
+
+// middleOf is the point in the middle of a land.
+func middleOf(land profile.Curve) r2.Vec {
+	from, to := land.Domain()
+	return r2.Vec{Y: land.At((from + to) / 2).Y} // on +Y but for rounding
 }
 
 func total(segments []Segment) float64 {
@@ -152,7 +157,7 @@ func (f *Tooth) link() {
 	if n := len(f.Root); n > 0 {
 		last := f.Side[len(f.Side)-1].End
 		f.Root[0].Start = last
-		f.Root[n-1].End = r2.Rotate(mirrored(last), f.pitch, r2.Vec{})
+		f.Root[n-1].End = f.exact.Step(1, 0)(mirrored(last))
 	}
 }
 
