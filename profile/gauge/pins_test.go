@@ -99,3 +99,33 @@ func TestStockPins(t *testing.T) {
 		}
 	}
 }
+
+// TestPinRangeOfSteepFlanks takes a ring whose flank begins at the base circle, where no
+// pin fits its curvature, and a pinion whose flanks face each other at the tip.
+func TestPinRangeOfSteepFlanks(t *testing.T) {
+	rb := 30 * math.Cos(20*degree)
+	ring := must(t, gauge.Spec{Kind: gauge.Ring, Module: 2, Teeth: 30, PressureAngle: 20 * degree, Tip: rb, TipForm: rb, Form: 31.5})
+	fits, err := ring.PinRange()
+	if err != nil {
+		t.Fatal(err)
+	}
+	d := fits.Largest * (1 - 1e-9)
+	p, err := ring.Pin(d)
+	if err != nil {
+		t.Fatal(err)
+	}
+	r, err := ring.FromPins(d, p.Value)
+	if err != nil {
+		t.Fatal(err)
+	}
+	near(t, "thickness", r.Thickness, ring.Thickness(), 1e-12)
+	// At the contact of the largest pin the flank's radius of curvature is the pin's; it falls short by
+	// the cube root of what the diameter does.
+	contact := math.Sqrt(p.Contact*p.Contact/4 - rb*rb)
+	near(t, "curvature", contact, d/2, 1e-1)
+
+	pinion := must(t, gauge.Spec{Module: 1, Teeth: 3, PressureAngle: 20 * degree, ProfileShift: 0.8, Tip: 2.8, TipForm: 2.8, Form: 1.45})
+	if fits, err := pinion.PinRange(); err != nil || fits.Largest != 5.6 {
+		t.Errorf("%+v, %v", fits, err)
+	}
+}
