@@ -2,8 +2,10 @@ package profile
 
 import "math"
 
-// Dimensions are the sizes of a solved gear in mm, named as in ISO 21771:2007.
-// Circles are given by their diameters; thicknesses are measured along the arc.
+// Dimensions are the sizes of a solved part in mm, named as in ISO 21771:2007.
+// Circles are given by their diameters; thicknesses are measured along the arc. A rack
+// has no circles and its diameters are 0; its thickness is on the datum line, and the
+// ends of its flank are given by their heights over it.
 type Dimensions struct {
 	Module            float64
 	Teeth             int
@@ -25,6 +27,8 @@ type Dimensions struct {
 	WorkingDepth      float64 // whole depth less clearance
 	Clearance         float64 // c, under the tip of a mate of the same rack, infeed included
 	MinFilletRadius   float64 // least radius of curvature of the fillet
+
+	FormHeight, TipFormHeight float64 // of a rack only
 }
 
 // DiametralPitch is teeth per inch of reference diameter, 25.4/m.

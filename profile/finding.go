@@ -25,6 +25,10 @@ const (
 	ParamMinTipThickness Param = "min-tip-thickness"
 	ParamBore            Param = "bore"
 	ParamTolerance       Param = "tolerance"
+	ParamCutterTeeth     Param = "cutter-teeth"
+	ParamCutterShift     Param = "cutter-shift"
+	ParamHeight          Param = "height"
+	ParamRimDiameter     Param = "rim-diameter"
 	ParamKerf            Param = "kerf"
 )
 
@@ -55,6 +59,11 @@ const (
 	RuleBoreIntoRoots      Rule = "bore-into-roots"
 	RuleTooManySegments    Rule = "too-many-segments"
 	RuleKerfTooWide        Rule = "kerf-too-wide"
+	RuleTipInsideBase      Rule = "tip-inside-base"
+	RuleSpaceCloses        Rule = "space-closes"
+	RuleCutterTooLarge     Rule = "cutter-too-large"
+	RuleCutterGouges       Rule = "cutter-gouges"
+	RuleNoCutterPosition   Rule = "no-cutter-position"
 )
 
 // Rules of warnings.
@@ -64,6 +73,7 @@ const (
 	RuleTipLowered      Rule = "tip-lowered"
 	RuleThinRim         Rule = "thin-rim"
 	RuleKerfLeaves      Rule = "kerf-leaves-material"
+	RuleCutterTrims     Rule = "cutter-trims"
 )
 
 // Malformed says that the request itself is wrong, rather than the gear it

@@ -37,6 +37,12 @@ type Spec struct {
 	Rounding     Rounding
 	ProfileShift float64
 
+	// CutterTeeth has a ring's root cut by a pinion-type cutter of so many teeth, whose
+	// tip is that of the basic rack, and CutterShift its profile shift in modules. 0
+	// rounds the root by arcs.
+	CutterTeeth int
+	CutterShift float64
+
 	Thinning   float64 // mm on the reference circle, >= 0
 	ThinningBy ThinningBy
 
@@ -80,14 +86,20 @@ func (s Spec) checkLimits() Violations {
 	if s.Rounding == RoundingFull {
 		rounding = 0 // ignored
 	}
+	teeth := limit{param: ParamTeeth, value: float64(s.Teeth), low: MinTeeth, high: MaxTeeth}
+	if s.Form == FormRack {
+		teeth.low = 1 // pitches
+	}
 	for _, l := range []limit{
+		teeth,
 		{param: ParamModule, value: s.Module, low: MinModule, high: MaxModule, dimension: Length},
-		{param: ParamTeeth, value: float64(s.Teeth), low: MinTeeth, high: MaxTeeth},
 		{param: ParamPressureAngle, value: s.Rack.PressureAngle, low: MinPressureAngle, high: MaxPressureAngle, dimension: Angle},
 		{param: ParamAddendum, value: s.Rack.Addendum, low: 0, high: depth, dimension: Length, open: true},
 		{param: ParamDedendum, value: s.Rack.Dedendum, low: 0, high: depth, dimension: Length, open: true},
 		{param: ParamRootRadius, value: rounding, low: 0, high: depth, dimension: Length},
 		{param: ParamProfileShift, value: s.ProfileShift, low: -MaxProfileShift, high: MaxProfileShift},
+		{param: ParamCutterTeeth, value: float64(s.CutterTeeth), low: 0, high: MaxTeeth},
+		{param: ParamCutterShift, value: s.CutterShift, low: -MaxProfileShift, high: MaxProfileShift},
 		{param: ParamThinning, value: s.Thinning, low: 0, high: full, dimension: Length},
 		{param: ParamTipDiameter, value: s.TipDiameter, low: 0, high: diameter, dimension: Length},
 		{param: ParamTipShortening, value: s.TipShortening, low: -depth, high: depth, dimension: Length},
@@ -108,6 +120,28 @@ func (s Spec) checkLimits() Violations {
 		found = append(found, Finding{Rule: RuleConflicting, Param: ParamTipShortening, Value: LengthOf(s.TipShortening),
 			Text: "the tip diameter is given, so it cannot be shortened as well",
 			Hint: "give --tip-diameter or --tip-shortening"})
+	}
+	return append(found, s.checkForm()...)
+}
+
+// checkForm lists what the form does not have.
+func (s Spec) checkForm() Violations {
+	var found Violations
+	if s.Form != FormRing && s.CutterTeeth != 0 {
+		found = append(found, Finding{Rule: RuleConflicting, Param: ParamCutterTeeth, Value: NumberOf(float64(s.CutterTeeth)),
+			Text: "only a ring is cut by a pinion-type cutter", Hint: "leave --cutter-teeth out"})
+	}
+	if s.CutterShift != 0 && s.CutterTeeth == 0 {
+		found = append(found, Finding{Rule: RuleConflicting, Param: ParamCutterShift, Value: NumberOf(s.CutterShift),
+			Text: "there is no cutter to shift", Hint: "give --cutter-teeth as well"})
+	}
+	if s.CutterTeeth != 0 && s.CutterTeeth < MinTeeth {
+		found = append(found, Finding{Rule: RuleOutOfRange, Param: ParamCutterTeeth, Value: NumberOf(float64(s.CutterTeeth)), Bound: NumberOf(MinTeeth),
+			Text: "cutter-teeth {value} is too small", Hint: "it must be at least {bound}"})
+	}
+	if s.Form == FormRack && s.TipDiameter != 0 {
+		found = append(found, Finding{Rule: RuleConflicting, Param: ParamTipDiameter, Value: LengthOf(s.TipDiameter),
+			Text: "a rack has no diameters", Hint: "give --tip-shortening"})
 	}
 	return found
 }

@@ -2,9 +2,8 @@ package profile
 
 import "math"
 
-// Tooth is one solved tooth of an external gear: exact curves and dimensions.
-// The whole outline is its left half, the mirror image of it, and their
-// rotations.
+// Tooth is one solved tooth: exact curves and dimensions. The whole outline is its left
+// half, the mirror image of it, and their repetitions.
 type Tooth struct {
 	Spec       Spec // with the rounding as made
 	Dimensions Dimensions
@@ -28,6 +27,17 @@ func Solve(s Spec) (*Tooth, error) {
 	if found := s.checkLimits(); found != nil {
 		return nil, found
 	}
+	switch s.Form {
+	case FormRing:
+		return solveRing(s)
+	case FormRack:
+		return solveRack(s)
+	}
+	return solveGear(s)
+}
+
+// solveGear makes the tooth of an external gear.
+func solveGear(s Spec) (*Tooth, error) {
 	g := newGeneration(s)
 	var warnings []Finding
 	rounding, harmless := g.roundRackTip(s)
