@@ -56,6 +56,9 @@ func (t *Tooth) Beam(width float64) (*Beam, error) {
 
 // beam is Beam without the words; false where the beam does not reach the form circle.
 func (t *Tooth) beam(width float64) (*Beam, bool) {
+	if t.Form != FormGear {
+		return t.beamAlong(width)
+	}
 	d := width / 2
 	b := &Beam{Width: width, Outline: Outline{Form: t.Form, Teeth: t.Teeth, Advance: t.Advance, LandSmooth: true,
 		Land: t.Land.Parallel(d)}}

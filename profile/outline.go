@@ -51,10 +51,10 @@ func (o Outline) Step(n, turn float64) func(r2.Vec) r2.Vec {
 
 // Between is the point as high as p in the middle between the tooth and its next
 // repetition.
-func (o Outline) Between(p r2.Vec) r2.Vec { return o.Step(0.5, 0)(r2.Vec{Y: o.height(p)}) }
+func (o Outline) Between(p r2.Vec) r2.Vec { return o.Step(0.5, 0)(r2.Vec{Y: o.Height(p)}) }
 
-// height is a point's distance from the axis, or its height over the datum line.
-func (o Outline) height(p r2.Vec) float64 {
+// Height is a point's distance from the axis, or its height over the datum line.
+func (o Outline) Height(p r2.Vec) float64 {
 	if o.Form == FormRack {
 		return p.Y
 	}
@@ -63,9 +63,9 @@ func (o Outline) height(p r2.Vec) float64 {
 
 // Depth is the depth of the teeth in mm, from the land to the end of a side.
 func (o Outline) Depth() float64 {
-	land := o.height(Start(o.Land))
+	land := o.Height(Start(o.Land))
 	if n := len(o.Side); n > 0 {
-		return land - o.height(End(o.Side[n-1].Curve))
+		return land - o.Height(End(o.Side[n-1].Curve))
 	}
 	return 0
 }
