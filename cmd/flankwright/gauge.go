@@ -120,7 +120,7 @@ func runGauge(_ context.Context, io streams, req request) error {
 		return err
 	}
 	if !show.quiet {
-		warn(io.err, made.warnings, sidecar.Show(made.gear.Unit))
+		warn(io.err, made.warnings, sidecar.Show(made.part.Unit))
 	}
 	if show.json {
 		document, err := made.document.Marshal()

@@ -17,8 +17,8 @@ func printGauge(out io.Writer, m *partMade) error {
 	var b strings.Builder
 	fmt.Fprintf(&b, "%s\n", m.title())
 	fmt.Fprintf(&b, "basic rack %s: %s\n", m.document.BasicRack["name"], m.document.BasicRack["source"])
-	show := sidecar.Show(m.gear.Unit)
-	d := m.gear.Tooth.Dimensions
+	show := sidecar.Show(m.part.Unit)
+	d := m.part.Tooth.Dimensions
 	fmt.Fprintf(&b, "tooth thickness on d: %s; usable flank from diameter %s to %s\n\n", show(profile.LengthOf(d.ToothThickness)),
 		show(profile.LengthOf(d.FormDiameter)), show(profile.LengthOf(d.TipFormDiameter)))
 	printInspection(&b, m)
@@ -34,7 +34,7 @@ func printGauge(out io.Writer, m *partMade) error {
 // printInspection prints the dimensions to measure, with limits if there are any.
 func printInspection(b *strings.Builder, m *partMade) {
 	i := m.inspection
-	show := sidecar.Show(m.gear.Unit)
+	show := sidecar.Show(m.part.Unit)
 	w := tabwriter.NewWriter(b, 0, 0, 2, ' ', 0)
 	header := "inspection\tsymbol\tmm\tinch\ttouches at"
 	withLimits := i.Chord != nil && i.Chord.Limits != nil || i.Pins != nil && i.Pins.Limits != nil

@@ -17,7 +17,7 @@ import (
 
 // partMade is a gear ready to be written or reported.
 type partMade struct {
-	gear     export.Gear
+	part     export.Part
 	body     *body.Body
 	kerf     *sidecar.KerfReport
 	features []body.Feature
@@ -58,7 +58,7 @@ func makePart(j partJob) (*partMade, error) {
 		return nil, fromFindings(err, show)
 	}
 	m := &maker{job: j, tooth: tooth, made: &partMade{dxf: j.dxf}, warnings: tooth.Warnings}
-	m.made.gear = export.Gear{Tooth: tooth, Fit: j.fit, Unit: j.unit, Turn: j.turn, Extent: j.extent, Reference: j.reference,
+	m.made.part = export.Part{Tooth: tooth, Fit: j.fit, Unit: j.unit, Turn: j.turn, Extent: j.extent, Reference: j.reference,
 		Cut: export.Cut{LeadIn: j.leadIn, Tabs: j.tabs, TabWidth: j.tabWidth}}
 	for _, step := range []func() error{m.makeInspection, m.makeBody, m.makeOutline, m.makeLabel} {
 		if err := step(); err != nil {
@@ -70,9 +70,9 @@ func makePart(j partJob) (*partMade, error) {
 	}
 	m.judgeFeatures()
 	made := m.made
-	made.drawing = made.gear.Drawing()
+	made.drawing = made.part.Drawing()
 	made.warnings = m.warnings
-	made.document = sidecar.Gear(sidecar.Made{Program: program(), Input: j.input, Rack: j.rack, Gear: made.gear, Drawing: made.drawing,
+	made.document = sidecar.Of(sidecar.Made{Program: program(), Input: j.input, Rack: j.rack, Part: made.part, Drawing: made.drawing,
 		Features: made.features, Kerf: made.kerf, Choices: made.choices, Warnings: m.warnings, Inspection: made.inspection})
 	return made, nil
 }
@@ -89,18 +89,18 @@ func (m *maker) makeBody() error {
 		m.choose(string(c.Param), c.Value, c.Why)
 	}
 	m.warnings = append(m.warnings, solved.Warnings...)
-	m.made.gear.Holes = solved.Loops
+	m.made.part.Holes = solved.Loops
 	if m.job.kerf == 0 {
 		return nil
 	}
 	m.made.kerf = &sidecar.KerfReport{Width: m.job.kerf}
-	m.made.gear.Holes = nil
+	m.made.part.Holes = nil
 	for _, l := range solved.Loops {
 		path, left, err := l.Parallel(m.job.kerf / 2)
 		if err != nil {
 			return m.refuse(err)
 		}
-		m.made.gear.Holes = append(m.made.gear.Holes, path)
+		m.made.part.Holes = append(m.made.part.Holes, path)
 		for _, at := range left {
 			m.leave("corner of the "+l.Name, at)
 		}
@@ -130,7 +130,7 @@ func (m *maker) makeOutline() error {
 	if err != nil {
 		return m.refuse(err)
 	}
-	m.made.gear.Drawn = drawn
+	m.made.part.Drawn = drawn
 	if m.made.kerf != nil {
 		part, err := fit.NewTooth(m.tooth.Outline, m.job.fit)
 		if err != nil {
@@ -194,7 +194,7 @@ func (m *maker) makeLabel() error {
 	if err != nil {
 		return m.refuse(err)
 	}
-	m.made.gear.Label = placed.Paths
+	m.made.part.Label = placed.Paths
 	if placed.Chosen {
 		m.choose(string(label.ParamHeight), profile.LengthOf(placed.Height), "the largest ISO 3098 lettering height that fits on the web")
 	}

@@ -106,7 +106,7 @@ func (o output) deliver(ctx context.Context, io streams, m *partMade) error {
 		}
 	}
 	if !o.quiet {
-		warn(io.err, m.warnings, sidecar.Show(m.gear.Unit))
+		warn(io.err, m.warnings, sidecar.Show(m.part.Unit))
 	}
 	switch {
 	case o.json:

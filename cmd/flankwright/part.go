@@ -59,9 +59,9 @@ func runPart(ctx context.Context, io streams, req request, params []parameter) e
 
 // title names the gear in one line.
 func (m *partMade) title() string {
-	d := m.gear.Tooth.Dimensions
+	d := m.part.Tooth.Dimensions
 	size := "module " + profile.NumberOf(d.Module).String() + " mm"
-	if m.gear.Unit == export.Inch {
+	if m.part.Unit == export.Inch {
 		size = "diametral pitch " + profile.NumberOf(d.DiametralPitch()).String()
 	}
 	return fmt.Sprintf("external gear, %d teeth, %s", d.Teeth, size)

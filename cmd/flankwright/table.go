@@ -24,14 +24,14 @@ func printTable(out io.Writer, m *partMade) error {
 	var b strings.Builder
 	fmt.Fprintf(&b, "%s\n", m.title())
 	fmt.Fprintf(&b, "basic rack %s: %s\n", m.document.BasicRack["name"], m.document.BasicRack["source"])
-	for _, line := range sizeNotes(m.gear.Tooth.Dimensions.Module) {
+	for _, line := range sizeNotes(m.part.Tooth.Dimensions.Module) {
 		fmt.Fprintln(&b, line)
 	}
 	fmt.Fprintln(&b)
 	w := tabwriter.NewWriter(&b, 0, 0, 2, ' ', 0)
 	fmt.Fprintln(w, "dimension\tsymbol\tmm\tinch")
-	rows := export.DimensionRows(m.gear.Tooth.Dimensions)
-	spec := m.gear.Tooth.Spec
+	rows := export.DimensionRows(m.part.Tooth.Dimensions)
+	spec := m.part.Tooth.Spec
 	rows = append(rows, export.RackRows(spec.Rack)...)
 	rows = append(rows,
 		export.Row{Name: "profile shift coefficient", Symbol: "x", Value: profile.NumberOf(spec.ProfileShift)},
@@ -92,9 +92,9 @@ func micrometres(mm float64) string { return profile.NumberOf(mm*1000).String() 
 // was chosen.
 func (m *partMade) reportLines() []string {
 	lines := []string{outlineLine(m)}
-	show := sidecar.Show(m.gear.Unit)
+	show := sidecar.Show(m.part.Unit)
 	if k := m.kerf; k != nil {
-		tip := m.gear.Tooth.Dimensions.TipDiameter
+		tip := m.part.Tooth.Dimensions.TipDiameter
 		lines = append(lines, fmt.Sprintf("kerf %s: drawn is the path of the beam, tip diameter %s for the part's %s", show(profile.LengthOf(k.Width)),
 			show(profile.LengthOf(tip+k.Width)), show(profile.LengthOf(tip))))
 	}
@@ -124,8 +124,8 @@ func outlineLine(m *partMade) string {
 		}
 		size := r.Bounds.Size()
 		return fmt.Sprintf("outline: %s (least possible: %d arcs), shortest %s; deviation %s of %s allowed; extents %.4f x %.4f mm (%.4f x %.4f in)",
-			strings.Join(entities, ", "), m.gear.Drawn.ArcLimit(m.gear.Extent), sidecar.Show(m.gear.Unit)(profile.LengthOf(r.Shortest)), micrometres(m.gear.Drawn.Deviation),
-			micrometres(m.gear.Drawn.Tolerance), size.X, size.Y, size.X*inchPerMM, size.Y*inchPerMM)
+			strings.Join(entities, ", "), m.part.Drawn.ArcLimit(m.part.Extent), sidecar.Show(m.part.Unit)(profile.LengthOf(r.Shortest)), micrometres(m.part.Drawn.Deviation),
+			micrometres(m.part.Drawn.Tolerance), size.X, size.Y, size.X*inchPerMM, size.Y*inchPerMM)
 	}
 	return ""
 }

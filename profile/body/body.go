@@ -34,6 +34,8 @@ const (
 	RuleHoleIntoRoots     profile.Rule = "hole-into-roots"
 	RuleHoleIntoBore      profile.Rule = "hole-into-bore"
 	RuleHoleIntoWindow    profile.Rule = "hole-into-window"
+	RuleRimTooThin        profile.Rule = "rim-too-thin"
+	RuleHoleThroughRim    profile.Rule = "hole-through-rim"
 	RuleNoRoomForWindows  profile.Rule = "no-room-for-windows"
 	RuleHubIntoBore       profile.Rule = "hub-into-bore"
 	RuleArmsMeet          profile.Rule = "arms-meet"
@@ -45,6 +47,7 @@ const (
 // builder collects what becomes of a spec.
 type builder struct {
 	spec     Spec
+	around   Around
 	root     float64 // mm, radius of the root circle
 	depth    float64 // mm, whole depth of the teeth
 	body     *Body
@@ -90,7 +93,8 @@ func Solve(s Spec, around Around) (*Body, error) {
 	if found := s.checkLimits(around); found != nil {
 		return nil, found
 	}
-	b := &builder{spec: s, root: around.RootDiameter / 2, depth: around.WholeDepth, body: &Body{Around: around}}
+	b := &builder{spec: s, around: around, root: around.RootDiameter / 2, depth: around.WholeDepth, body: &Body{Around: around}}
+	b.rim()
 	b.bore()
 	b.windows()
 	b.holes()
@@ -130,11 +134,11 @@ func (b *Body) HoleArea() float64 {
 	return sum
 }
 
-// Clearance is the distance in mm from p to the nearest edge of the web, which is the
-// root circle or a loop: positive on the web, negative off it. It changes by no more
-// than p moves.
+// Clearance is the distance in mm from p to the nearest edge of the web, which is that
+// of what the teeth leave or a loop: positive on the web, negative off it. It changes by
+// no more than p moves.
 func (b *Body) Clearance(p r2.Vec) float64 {
-	least := b.Around.RootDiameter/2 - r2.Norm(p)
+	least := b.Around.clearance(p)
 	for _, l := range b.Loops {
 		if least < 0 {
 			return least

@@ -78,7 +78,13 @@ func (b *builder) webs() []Feature {
 	}
 	for i, g := range b.groups {
 		far := g.loops[0].farthest(r2.Vec{})
-		add("between root circle and "+g.name, spanOf(far, r2.Scale(b.root/r2.Norm(far), far)))
+		if b.around.Form == profile.FormRing {
+			near := nearestTo(g.loops[0], r2.Vec{})
+			add("between root circle and "+g.name, spanOf(near, r2.Scale(b.root/r2.Norm(near), near)))
+			add("between "+g.name+" and outer edge", spanOf(far, r2.Scale(b.around.RimDiameter/2/r2.Norm(far), far)))
+		} else {
+			add("between root circle and "+g.name, spanOf(far, r2.Scale(b.root/r2.Norm(far), far)))
+		}
 		if n := len(g.loops); n > 1 {
 			// The next is the nearest of the others, turned by the least angle.
 			add("between one "+g.name+" and the next", distance(g.loops[0], g.loops[1]))
@@ -114,6 +120,9 @@ func nearestPair(a, b group) span {
 // asks. The windows' own rim is asked for or chosen, and judged as such.
 func (b *builder) rims() {
 	least := backupRatio * b.depth
+	if b.around.Form == profile.FormRing {
+		return // judged by rim
+	}
 	for _, g := range b.groups {
 		rim, param := b.root-g.loops[0].reach(), g.param
 		if g.param == ParamWindows {

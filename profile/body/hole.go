@@ -69,7 +69,9 @@ func (h HoleCircle) violation(rule profile.Rule, largest float64, text, hint str
 // holesClear checks the holes against the roots and each other: centers are at Circle/2
 // from the axis and Circle sin(pi/N) from the next.
 func (b *builder) holesClear(h HoleCircle) {
-	if largest := 2*b.root - h.Circle; (largest-h.Diameter)/2 < leastPiece {
+	if b.around.Form == profile.FormRing {
+		b.holesInRim(h)
+	} else if largest := 2*b.root - h.Circle; (largest-h.Diameter)/2 < leastPiece {
 		f := h.violation(RuleHoleIntoRoots, largest, "holes {value} on circle {0} cut into the roots at diameter {1}",
 			"make the holes smaller than {bound}, or their circle smaller than {2}", 2*b.root, 2*b.root-h.Diameter)
 		if largest <= 2*leastPiece {

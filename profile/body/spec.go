@@ -53,12 +53,6 @@ type Windows struct {
 	CornerRadius float64 // mm
 }
 
-// Around is what the teeth leave for the body. Lengths are mm.
-type Around struct {
-	RootDiameter float64
-	WholeDepth   float64
-}
-
 // The parameters only a body has.
 const (
 	ParamKeyway       profile.Param = "keyway"
@@ -97,6 +91,7 @@ func (s Spec) checkLimits(around Around) profile.Violations {
 	var found profile.Violations
 	limits := []limit{
 		{param: paramRootDiameter, value: around.RootDiameter, low: leastPiece, high: maxLength},
+		{param: profile.ParamRimDiameter, value: around.RimDiameter, high: maxLength},
 		{param: paramWholeDepth, value: around.WholeDepth, high: maxLength},
 		{param: profile.ParamBore, value: s.Bore, high: maxLength},
 		{param: ParamBoreFlat, value: s.BoreFlat, high: maxLength},

@@ -170,3 +170,75 @@ func TestFormOutlines(t *testing.T) {
 		}
 	}
 }
+
+// TestRackLoops: area and perimeter are those of the bar and its teeth, and a beam's loop
+// is as much larger as a convex outline's would be at its corners.
+func TestRackLoops(t *testing.T) {
+	for name, s := range formSpecs() {
+		if s.Form != profile.FormRack {
+			continue
+		}
+		tooth, err := profile.Solve(s)
+		if err != nil {
+			t.Fatal(err)
+		}
+		for _, kind := range []Kind{Arc, Cubic, Line} {
+			f, err := NewTooth(tooth.Outline, Options{Curves: kind, Tolerance: 1e-4})
+			if err != nil {
+				t.Fatal(err)
+			}
+			for _, half := range []bool{false, true} {
+				const height = 9.0
+				loop := f.Rack(half, Bar{Height: height}, 0.3)
+				d := tooth.Dimensions
+				// Land, sides and root of one repetition over the back, by the trapezoid rule
+				// on the exact curves.
+				area := float64(s.Teeth) * areaOver(tooth.Outline, height)
+				if math.Abs(loop.Area()-area) > 1e-4*float64(s.Teeth)*4*d.WholeDepth {
+					t.Errorf("%s, kind %d, half teeth %v: area %g, not %g", name, kind, half, loop.Area(), area)
+				}
+				if !loop.Closed {
+					t.Errorf("%s is open", name)
+				}
+				const width = 0.4
+				beam, err := tooth.Beam(width)
+				if err != nil {
+					t.Fatal(err)
+				}
+				g, err := NewTooth(beam.Outline, Options{Curves: kind, Tolerance: 1e-4})
+				if err != nil {
+					t.Fatal(err)
+				}
+				around := g.Rack(half, Bar{Height: height, Outside: width / 2}, 0.3)
+				// Steiner's formula holds for any outline whose parallel does not fold.
+				want := loop.Area() + loop.Length()*width/2 + math.Pi*width*width/4
+				if math.Abs(around.Area()-want) > 2e-4*loop.Length() {
+					t.Errorf("%s, kind %d, half teeth %v: the beam's area %g, not %g", name, kind, half, around.Area(), want)
+				}
+			}
+		}
+	}
+}
+
+// areaOver is the area of one repetition of a rack down to its back.
+func areaOver(o profile.Outline, height float64) float64 {
+	sum := 0.0
+	add := func(c profile.Curve, times float64) {
+		from, to := c.Domain()
+		const steps = 2000
+		at := c.At(from)
+		for i := range steps {
+			next := c.At(from + (to-from)*float64(i+1)/steps)
+			sum += times * (at.X - next.X) * (at.Y + next.Y + 2*height) / 2
+			at = next
+		}
+	}
+	add(o.Land, 1)
+	for _, p := range o.Side {
+		add(p.Curve, 2)
+	}
+	if o.Root != nil {
+		add(o.Root, 1)
+	}
+	return sum
+}

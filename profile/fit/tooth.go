@@ -27,6 +27,7 @@ type Tooth struct {
 	Tolerance        float64 // mm, as asked
 	Deviation        float64 // mm, largest distance found between drawn and exact curve, before rounding
 	exact            profile.Outline
+	options          Options
 	// The least numbers of arcs that could draw land, side and root.
 	landLimit, sideLimit, rootLimit int
 }
@@ -40,7 +41,7 @@ func NewTooth(t profile.Outline, o Options) (*Tooth, error) {
 	if err := checkCount(t, o); err != nil {
 		return nil, err
 	}
-	f := &Tooth{Tolerance: o.Tolerance, exact: t}
+	f := &Tooth{Tolerance: o.Tolerance, exact: t, options: o}
 	o.Tolerance -= pointRounding
 	f.Land, f.landLimit = f.draw(t.Land, o, ends{})
 	smooth := t.LandSmooth

@@ -12,7 +12,7 @@ import (
 )
 
 // cutGear is a gear with a keyed bore, holes and windows, to be cut with lead-ins.
-func cutGear(t *testing.T, cut Cut, turn float64) Gear {
+func cutGear(t *testing.T, cut Cut, turn float64) Part {
 	t.Helper()
 	rack, _ := profile.LookupRack("iso53-a", 2)
 	tooth, err := profile.Solve(profile.Spec{Module: 2, Teeth: 60, Rack: rack.For(2, profile.RackChange{})})
@@ -31,7 +31,7 @@ func cutGear(t *testing.T, cut Cut, turn float64) Gear {
 	if err != nil {
 		t.Fatal(err)
 	}
-	return Gear{Tooth: tooth, Drawn: drawn, Holes: inside.Loops, Fit: o, Cut: cut, Turn: turn}
+	return Part{Tooth: tooth, Drawn: drawn, Holes: inside.Loops, Fit: o, Cut: cut, Turn: turn}
 }
 
 // TestLeadIns: every edge has one lead-in; it arrives on the edge, in the direction of

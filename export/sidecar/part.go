@@ -36,7 +36,7 @@ type Made struct {
 	Program  string // and its version
 	Input    map[string]any
 	Rack     Rack
-	Gear     export.Gear
+	Part     export.Part
 	Drawing  export.Drawing
 	Features []body.Feature
 	Kerf     *KerfReport // nil without a kerf
@@ -46,9 +46,9 @@ type Made struct {
 	Warnings   []profile.Finding
 }
 
-// Gear builds the document of a gear; files are added when their bytes are known.
-func Gear(m Made) *Document {
-	unit := m.Gear.Unit
+// Of builds the document of a part; files are added when their bytes are known.
+func Of(m Made) *Document {
+	unit := m.Part.Unit
 	doc := &Document{
 		Schema:     SchemaID,
 		Program:    m.Program,
@@ -63,10 +63,10 @@ func Gear(m Made) *Document {
 		Warnings:   []Warning{},
 		Cautions:   export.Cautions(),
 	}
-	for _, r := range export.RackRows(m.Gear.Tooth.Spec.Rack) {
+	for _, r := range export.RackRows(m.Part.Tooth.Spec.Rack) {
 		doc.BasicRack[r.Key] = value(r.Value, r.Symbol, unit)
 	}
-	for _, r := range export.DimensionRows(m.Gear.Tooth.Dimensions) {
+	for _, r := range export.DimensionRows(m.Part.Tooth.Dimensions) {
 		doc.Dimensions[r.Key] = value(r.Value, r.Symbol, unit)
 	}
 	doc.Inspection = inspection(m.Inspection, unit, false)
@@ -77,7 +77,7 @@ func Gear(m Made) *Document {
 			o.Tolerance, o.Deviation = &tolerance, &deviation
 		}
 		if r.Layer == export.LayerOutline {
-			o.ArcLimit = m.Gear.Drawn.ArcLimit(m.Gear.Extent)
+			o.ArcLimit = m.Part.Drawn.ArcLimit(m.Part.Extent)
 		}
 		doc.Outline[string(r.Layer)] = o
 	}

@@ -10,9 +10,9 @@ import (
 	"flankwright/profile/fit"
 )
 
-// Gear is what a gear's sheet shows. With a kerf, Drawn and Holes are the paths of the
+// Part is what the sheet of a gear, ring or rack shows. With a kerf, Drawn and Holes are the paths of the
 // beam, else the part's own edges.
-type Gear struct {
+type Part struct {
 	Tooth     *profile.Tooth
 	Drawn     *fit.Tooth
 	Holes     []body.Loop
@@ -33,7 +33,7 @@ type Cut struct {
 }
 
 // Drawing lays the gear out: inner loops, outline, then what is not an edge.
-func (g Gear) Drawing() Drawing {
+func (g Part) Drawing() Drawing {
 	d := Drawing{Unit: g.Unit}
 	var leads []Item
 	for _, l := range g.Holes {
@@ -63,7 +63,7 @@ func (g Gear) Drawing() Drawing {
 }
 
 // outline is the toothed edge: one path, or the chains between tabs.
-func (g Gear) outline() []fit.Path {
+func (g Part) outline() []fit.Path {
 	if g.Cut.Tabs > 0 {
 		return g.Drawn.TabbedOutline(g.Cut.Tabs, g.Cut.TabWidth, g.Turn)
 	}
@@ -72,7 +72,7 @@ func (g Gear) outline() []fit.Path {
 
 // hole is an inner loop and its lead-in, if asked for. A bore is led into at its lowest
 // place, opposite the keyway on +Y; a window at its outer edge.
-func (g Gear) hole(l body.Loop) (item Item, leads []Item) {
+func (g Part) hole(l body.Loop) (item Item, leads []Item) {
 	layer := LayerHoles
 	if l.Kind == body.Bore {
 		layer = LayerBore
@@ -101,7 +101,7 @@ func (g Gear) hole(l body.Loop) (item Item, leads []Item) {
 }
 
 // reference is what helps to place the part and is not to be cut.
-func (g Gear) reference() []Item {
+func (g Part) reference() []Item {
 	var items []Item
 	if g.Reference {
 		for _, c := range g.Tooth.ReferenceCircles() {
@@ -119,7 +119,7 @@ func (g Gear) reference() []Item {
 }
 
 // ray is the point of the tip circle at an angle from +Y.
-func (g Gear) ray(angle float64) r2.Vec {
+func (g Part) ray(angle float64) r2.Vec {
 	sin, cos := math.Sincos(math.Pi/2 + g.Turn + angle)
 	return r2.Scale(g.Tooth.Dimensions.TipDiameter/2, r2.Vec{X: cos, Y: sin})
 }

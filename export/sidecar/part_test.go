@@ -31,9 +31,9 @@ func gear(t *testing.T, unit export.Unit) []byte {
 	if err != nil {
 		t.Fatal(err)
 	}
-	g := export.Gear{Tooth: tooth, Drawn: drawn, Holes: holes(t, tooth), Fit: fit.Options{Curves: fit.Arc, Tolerance: 1e-3}, Unit: unit, Reference: true}
+	g := export.Part{Tooth: tooth, Drawn: drawn, Holes: holes(t, tooth), Fit: fit.Options{Curves: fit.Arc, Tolerance: 1e-3}, Unit: unit, Reference: true}
 	input := map[string]any{"command": "gear", "module": "2mm", "teeth": "12", "reference": true}
-	d := sidecar.Gear(sidecar.Made{Input: input, Rack: sidecar.Rack{Name: "iso53-a", Source: rack.Source}, Gear: g, Drawing: g.Drawing(),
+	d := sidecar.Of(sidecar.Made{Input: input, Rack: sidecar.Rack{Name: "iso53-a", Source: rack.Source}, Part: g, Drawing: g.Drawing(),
 		Warnings: tooth.Warnings,
 		Kerf: &sidecar.KerfReport{Width: 0.2, PartArea: 400, PartPerimeter: 150,
 			Leftover: []sidecar.LeftoverAt{{Place: "root fillet", Leftover: profile.Leftover{At: r2.Vec{X: 1, Y: 9}, Depth: 0.01}}}},
