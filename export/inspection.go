@@ -36,15 +36,19 @@ type Reading struct {
 // Inspect works the dimensions out. A pin diameter of 0 takes the nearest one kept in
 // stock in the system of units; a given one that does not do is refused with
 // profile.Violations. What cannot be measured otherwise is noted in Missing.
-func Inspect(t *profile.Tooth, system gauge.System, pin float64, allowance *gauge.Allowance) (gauge.Gear, Inspection, error) {
+func Inspect(t *profile.Tooth, back float64, system gauge.System, pin float64, allowance *gauge.Allowance) (gauge.Gear, Inspection, error) {
 	var i Inspection
-	g, err := gauge.New(gauge.OfTooth(t))
+	g, err := gauge.New(gauge.OfTooth(t, back))
 	if err != nil {
 		return g, i, i.miss(err)
 	}
-	spans, err := g.Spans()
-	if err := i.miss(err); err != nil {
-		return g, i, err
+	var spans []gauge.Span
+	if t.Form == profile.FormGear { // the others have no flanks that parallel jaws could take
+		if spans, err = g.Spans(); err != nil {
+			if err := i.miss(err); err != nil {
+				return g, i, err
+			}
+		}
 	}
 	for _, s := range spans {
 		limits, err := limited(allowance, func(a gauge.Allowance) (gauge.Limits, error) { return g.SpanLimits(s.TeethSpanned, a) })

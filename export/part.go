@@ -23,6 +23,11 @@ type Part struct {
 	Reference bool // whether reference circles and center lines are shown
 	Cut       Cut
 	Label     []fit.Path // mm, not yet turned
+
+	// RimRadius is the outer edge of a ring, or the beam's path around it; 0 where the
+	// drawing holds the toothed bore only.
+	RimRadius float64
+	Bar       fit.Bar // of a rack
 }
 
 // Cut are aids for cutting; zero values leave them out. Lengths are mm.
@@ -42,11 +47,24 @@ func (g Part) Drawing() Drawing {
 		leads = append(leads, lead...)
 	}
 	for _, path := range g.outline() {
-		d.Items = append(d.Items, Item{Layer: LayerOutline, Role: Outer, Path: &path,
-			Tolerance: g.Drawn.Tolerance, Deviation: g.Drawn.Deviation})
+		item := Item{Layer: LayerOutline, Role: Outer, Path: &path, Tolerance: g.Drawn.Tolerance, Deviation: g.Drawn.Deviation}
+		room := g.Cut.LeadIn
+		if g.Tooth.Form == profile.FormRing && path.Closed {
+			item.Role = Hole
+			room = math.Min(room, g.Tooth.Dimensions.TipDiameter/4)
+		}
+		d.Items = append(d.Items, item)
 		if g.Cut.LeadIn > 0 {
 			first := path.Segments[0]
-			leads = append(leads, leadIn(first.Start, first.StartTangent(), g.Cut.LeadIn))
+			leads = append(leads, leadIn(first.Start, first.StartTangent(), room))
+		}
+	}
+	if rim := g.RimRadius; rim > 0 && !g.Extent.Partial() {
+		d.Items = append(d.Items, Item{Layer: LayerOutline, Role: Outer, Circle: &Circle{Radius: rim}, Tolerance: g.Fit.Tolerance})
+		if g.Cut.LeadIn > 0 {
+			up := r2.Rotate(r2.Vec{Y: 1}, g.Turn, r2.Vec{})
+			// Counter-clockwise at the lowest place is towards +X.
+			leads = append(leads, leadIn(r2.Scale(-rim, up), r2.Vec{X: up.Y, Y: -up.X}, g.Cut.LeadIn))
 		}
 	}
 	d.Items = append(d.Items, g.reference()...)
@@ -62,8 +80,17 @@ func (g Part) Drawing() Drawing {
 	return d
 }
 
-// outline is the toothed edge: one path, or the chains between tabs.
+// outline is the toothed edge: one path, or the chains between tabs. That of a ring is a
+// hole and runs clockwise; that of a whole rack goes round its back.
 func (g Part) outline() []fit.Path {
+	switch g.Tooth.Form {
+	case profile.FormRing:
+		return []fit.Path{g.Drawn.Outline(g.Extent, g.Turn).Reversed()}
+	case profile.FormRack:
+		if !g.Extent.Partial() {
+			return []fit.Path{g.Drawn.Rack(g.Extent.HalfTeeth, g.Bar, g.Turn)}
+		}
+	}
 	if g.Cut.Tabs > 0 {
 		return g.Drawn.TabbedOutline(g.Cut.Tabs, g.Cut.TabWidth, g.Turn)
 	}
@@ -102,6 +129,9 @@ func (g Part) hole(l body.Loop) (item Item, leads []Item) {
 
 // reference is what helps to place the part and is not to be cut.
 func (g Part) reference() []Item {
+	if g.Tooth.Form == profile.FormRack {
+		return g.rackReference()
+	}
 	var items []Item
 	if g.Reference {
 		for _, c := range g.Tooth.ReferenceCircles() {
@@ -118,10 +148,38 @@ func (g Part) reference() []Item {
 	return items
 }
 
-// ray is the point of the tip circle at an angle from +Y.
+// ray is the point of the part's outermost circle at an angle from +Y.
 func (g Part) ray(angle float64) r2.Vec {
 	sin, cos := math.Sincos(math.Pi/2 + g.Turn + angle)
-	return r2.Scale(g.Tooth.Dimensions.TipDiameter/2, r2.Vec{X: cos, Y: sin})
+	d := g.Tooth.Dimensions
+	radius := math.Max(math.Max(d.TipDiameter, d.RootDiameter)/2, g.RimRadius)
+	return r2.Scale(radius, r2.Vec{X: cos, Y: sin})
+}
+
+// rackReference is the datum line, and the limits of a partial extent across the teeth.
+func (g Part) rackReference() []Item {
+	d := g.Tooth.Dimensions
+	at := func(x, y float64) r2.Vec { return r2.Rotate(r2.Vec{X: x, Y: y}, g.Turn, r2.Vec{}) }
+	left, right := -d.CircularPitch/2, (float64(d.Teeth)-0.5)*d.CircularPitch
+	if g.Extent.HalfTeeth {
+		left, right = 0, float64(d.Teeth)*d.CircularPitch
+	}
+	switch {
+	case g.Extent.Kind == fit.ExtentSpace:
+		left, right = 0, d.CircularPitch
+	case g.Extent.Partial():
+		left, right = -d.CircularPitch/2, (float64(g.Extent.Teeth)-0.5)*d.CircularPitch
+	}
+	var items []Item
+	if g.Reference {
+		items = append(items, marker(at(left, 0), at(right, 0)))
+	}
+	if g.Extent.Partial() {
+		for _, x := range [2]float64{left, right} {
+			items = append(items, marker(at(x, -d.Dedendum-d.WholeDepth), at(x, d.Addendum)))
+		}
+	}
+	return items
 }
 
 // marker is an open chain of straight lines that is not an edge of the part.

@@ -60,6 +60,7 @@ const (
 	RuleTooManySegments    Rule = "too-many-segments"
 	RuleKerfTooWide        Rule = "kerf-too-wide"
 	RuleTipInsideBase      Rule = "tip-inside-base"
+	RuleFewPitches         Rule = "few-pitches"
 	RuleSpaceCloses        Rule = "space-closes"
 	RuleCutterTooLarge     Rule = "cutter-too-large"
 	RuleCutterGouges       Rule = "cutter-gouges"

@@ -88,7 +88,7 @@ func (s Spec) checkLimits() Violations {
 	}
 	teeth := limit{param: ParamTeeth, value: float64(s.Teeth), low: MinTeeth, high: MaxTeeth}
 	if s.Form == FormRack {
-		teeth.low = 1 // pitches
+		teeth.low = math.Inf(-1) // checkForm speaks of pitches
 	}
 	for _, l := range []limit{
 		teeth,
@@ -138,6 +138,10 @@ func (s Spec) checkForm() Violations {
 	if s.CutterTeeth != 0 && s.CutterTeeth < MinTeeth {
 		found = append(found, Finding{Rule: RuleOutOfRange, Param: ParamCutterTeeth, Value: NumberOf(float64(s.CutterTeeth)), Bound: NumberOf(MinTeeth),
 			Text: "cutter-teeth {value} is too small", Hint: "it must be at least {bound}"})
+	}
+	if s.Form == FormRack && s.Teeth < 1 {
+		found = append(found, Finding{Rule: RuleFewPitches, Param: ParamTeeth, Value: NumberOf(float64(s.Teeth)), Bound: NumberOf(1),
+			Text: "a rack of {value} pitches has no teeth", Hint: "give {bound} pitch or more"})
 	}
 	if s.Form == FormRack && s.TipDiameter != 0 {
 		found = append(found, Finding{Rule: RuleConflicting, Param: ParamTipDiameter, Value: LengthOf(s.TipDiameter),

@@ -103,7 +103,7 @@ func TestRackRefusals(t *testing.T) {
 		"tip radius": {func(s *profile.Spec) { s.TipRadius = 4 }, profile.RuleTipRadiusTooLarge, func(s *profile.Spec, v float64) { s.TipRadius = 0.999 * v }},
 		"chamfer":    {func(s *profile.Spec) { s.TipChamfer = 4 }, profile.RuleTipChamferTooLarge, func(s *profile.Spec, v float64) { s.TipChamfer = 0.999 * v }},
 		"diameter":   {func(s *profile.Spec) { s.TipDiameter = 4 }, profile.RuleConflicting, nil},
-		"no pitch":   {func(s *profile.Spec) { s.Teeth = 0 }, profile.RuleOutOfRange, nil},
+		"no pitch":   {func(s *profile.Spec) { s.Teeth = 0 }, profile.RuleFewPitches, nil},
 		"cutter":     {func(s *profile.Spec) { s.CutterTeeth = 20 }, profile.RuleConflicting, nil},
 	} {
 		s := rackSpec("iso53-a", 2, 0)

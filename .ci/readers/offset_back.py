@@ -13,6 +13,7 @@ from ezdxf import path as ezpath
 from shapely.geometry import Polygon
 
 FLAT = 5e-5  # drawing units, distance of chords from arcs
+CLOSED = 1e-8  # drawing units, ten steps of the files' last decimal
 
 
 def loops(name):
@@ -38,6 +39,8 @@ def flat(e):
         else:
             v = [part.dxf.start, part.dxf.end]
         points.extend(v[1:] if points else v)
+    if points[-1].distance(points[0]) < CLOSED:
+        points.pop()  # the first again, but for rounding
     return points
 
 

@@ -24,6 +24,9 @@ func TestKerfMovedBack(t *testing.T) {
 		"metric":   {0.25, []string{"--module", "2", "--teeth", "40", "--bore", "20", "--keyway", "iso", "--hole-circle", "5x6@55"}},
 		"windows":  {0.3, []string{"--module", "2", "--teeth", "60", "--windows", "4", "--bore", "20", "--hub-diameter", "36"}},
 		"undercut": {0.2, []string{"--module", "1.5", "--teeth", "9", "--bore", "4"}},
+		"ring":     {0.3, []string{"ring", "--module", "2", "--teeth", "48", "--rim-diameter", "125", "--hole-circle", "4x5@114", "--tip-chamfer", "0.2"}},
+		"cut ring": {0.3, []string{"ring", "--module", "2", "--teeth", "48", "--cutter-teeth", "28", "--rim-diameter", "125"}},
+		"rack":     {0.3, []string{"rack", "--module", "2", "--teeth", "6", "--height", "12"}},
 		"inch":     {0.008, []string{"--diametral-pitch", "10", "--teeth", "21", "--bore", "0.5", "--tip-chamfer", "0.01"}},
 	} {
 		t.Run(name, func(t *testing.T) {
@@ -32,7 +35,8 @@ func TestKerfMovedBack(t *testing.T) {
 			part, path := filepath.Join(dir, "part.dxf"), filepath.Join(dir, "path.dxf")
 			kerf := strconv.FormatFloat(c.kerf, 'f', -1, 64)
 			for _, args := range [][]string{{"-o", part}, {"-o", path, "--kerf", kerf}} {
-				if code, _, stderr := call(t, append(append([]string{"gear"}, c.args...), args...)...); code != exitDone {
+				form, rest := formOf(c.args)
+				if code, _, stderr := call(t, append(append([]string{form}, rest...), args...)...); code != exitDone {
 					t.Fatal(stderr)
 				}
 			}

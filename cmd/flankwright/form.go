@@ -18,7 +18,7 @@ type job interface {
 func forms() []form {
 	resolve := func(r request) (job, error) { return resolvePart(r) }
 	var list []form
-	for _, name := range []string{"gear"} {
+	for _, name := range []string{"gear", "ring", "rack"} {
 		list = append(list, form{name, func() []parameter { return partParameters(name) }, resolve})
 	}
 	return list

@@ -19,8 +19,13 @@ func printGauge(out io.Writer, m *partMade) error {
 	fmt.Fprintf(&b, "basic rack %s: %s\n", m.document.BasicRack["name"], m.document.BasicRack["source"])
 	show := sidecar.Show(m.part.Unit)
 	d := m.part.Tooth.Dimensions
-	fmt.Fprintf(&b, "tooth thickness on d: %s; usable flank from diameter %s to %s\n\n", show(profile.LengthOf(d.ToothThickness)),
-		show(profile.LengthOf(d.FormDiameter)), show(profile.LengthOf(d.TipFormDiameter)))
+	if m.part.Tooth.Form == profile.FormRack {
+		fmt.Fprintf(&b, "tooth thickness on the datum line: %s; usable flank from %s to %s over it\n\n", show(profile.LengthOf(d.ToothThickness)),
+			show(profile.LengthOf(d.FormHeight)), show(profile.LengthOf(d.TipFormHeight)))
+	} else {
+		fmt.Fprintf(&b, "tooth thickness on d: %s; usable flank from diameter %s to %s\n\n", show(profile.LengthOf(d.ToothThickness)),
+			show(profile.LengthOf(d.FormDiameter)), show(profile.LengthOf(d.TipFormDiameter)))
+	}
 	printInspection(&b, m)
 	printTolerances(&b, m.inspection)
 	printReadings(&b, m.inspection, show)
@@ -78,7 +83,15 @@ func printInspection(b *strings.Builder, m *partMade) {
 }
 
 // pinsLie is how pins are measured on the part.
-func pinsLie(*partMade) string { return "over" }
+func pinsLie(m *partMade) string {
+	switch m.part.Tooth.Form {
+	case profile.FormRing:
+		return "between"
+	case profile.FormRack:
+		return "back over"
+	}
+	return "over"
+}
 
 // printTolerances prints the flank tolerances of a class.
 func printTolerances(b *strings.Builder, i export.Inspection) {

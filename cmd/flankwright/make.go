@@ -3,6 +3,7 @@ package main
 import (
 	"errors"
 	"fmt"
+	"math"
 
 	"gonum.org/v1/gonum/spatial/r2"
 
@@ -60,7 +61,7 @@ func makePart(j partJob) (*partMade, error) {
 	m := &maker{job: j, tooth: tooth, made: &partMade{dxf: j.dxf}, warnings: tooth.Warnings}
 	m.made.part = export.Part{Tooth: tooth, Fit: j.fit, Unit: j.unit, Turn: j.turn, Extent: j.extent, Reference: j.reference,
 		Cut: export.Cut{LeadIn: j.leadIn, Tabs: j.tabs, TabWidth: j.tabWidth}}
-	for _, step := range []func() error{m.makeInspection, m.makeBody, m.makeOutline, m.makeLabel} {
+	for _, step := range []func() error{m.makeBody, m.makeInspection, m.makeOutline, m.makeLabel} {
 		if err := step(); err != nil {
 			return nil, err
 		}
@@ -79,8 +80,11 @@ func makePart(j partJob) (*partMade, error) {
 
 // makeBody solves bore, holes and windows, and the beam's path along them.
 func (m *maker) makeBody() error {
-	d := m.tooth.Dimensions
-	solved, err := body.Solve(m.job.body, body.Around{RootDiameter: d.RootDiameter, WholeDepth: d.WholeDepth})
+	around, ok := m.around()
+	if !ok {
+		return nil
+	}
+	solved, err := body.Solve(m.job.body, around)
 	if err != nil {
 		return m.refuse(err)
 	}
@@ -131,18 +135,40 @@ func (m *maker) makeOutline() error {
 		return m.refuse(err)
 	}
 	m.made.part.Drawn = drawn
+	m.made.part.Bar.Outside = m.job.kerf / 2
+	if m.job.rim > 0 {
+		m.made.part.RimRadius = (m.job.rim + m.job.kerf) / 2
+	}
 	if m.made.kerf != nil {
-		part, err := fit.NewTooth(m.tooth.Outline, m.job.fit)
-		if err != nil {
+		if err := m.measurePart(); err != nil {
 			return m.refuse(err)
-		}
-		edge := part.Outline(fit.Extent{}, 0)
-		m.made.kerf.PartArea, m.made.kerf.PartPerimeter = edge.Area(), edge.Length()
-		if m.made.body != nil {
-			m.made.kerf.PartArea -= m.made.body.HoleArea()
 		}
 	}
 	m.checkTabs(drawn)
+	return nil
+}
+
+// measurePart measures the part itself where the beam's path is drawn.
+func (m *maker) measurePart() error {
+	part, err := fit.NewTooth(m.tooth.Outline, m.job.fit)
+	if err != nil {
+		return err
+	}
+	k := m.made.kerf
+	if m.job.spec.Form == profile.FormRack {
+		edge := part.Rack(m.job.extent.HalfTeeth, fit.Bar{Height: m.made.part.Bar.Height}, 0)
+		k.PartArea, k.PartPerimeter = edge.Area(), edge.Length()
+		return nil
+	}
+	edge := part.Outline(fit.Extent{}, 0)
+	k.PartArea, k.PartPerimeter = edge.Area(), edge.Length()
+	if m.job.spec.Form == profile.FormRing {
+		rim := m.job.rim / 2
+		k.PartArea = math.Max(0, math.Pi*rim*rim-k.PartArea)
+	}
+	if m.made.body != nil {
+		k.PartArea -= m.made.body.HoleArea()
+	}
 	return nil
 }
 
@@ -190,6 +216,11 @@ func (m *maker) makeLabel() error {
 	if m.job.label == "" || m.made.body == nil {
 		return nil
 	}
+	if m.job.spec.Form == profile.FormRing && m.job.rim == 0 {
+		m.refused = append(m.refused, profile.Finding{Rule: label.RuleNoRoom, Param: label.ParamLabel,
+			Text: "a label has no rim to lie on", Hint: "give --rim-diameter as well"})
+		return nil
+	}
 	placed, err := label.Place(m.job.label, m.job.labelHeight, m.made.body)
 	if err != nil {
 		return m.refuse(err)
@@ -221,5 +252,7 @@ func (m *maker) judgeFeatures() {
 				Text: "the smallest " + f.Name + ", " + f.Place + ", is {value}, below the least feature {bound}"})
 		}
 	}
-	m.made.features = append(m.made.features, m.made.body.Features...)
+	if m.made.body != nil {
+		m.made.features = append(m.made.features, m.made.body.Features...)
+	}
 }

@@ -22,7 +22,7 @@ func (m *maker) makeInspection() error {
 	if m.job.unit == export.Inch {
 		system = gauge.Inch
 	}
-	g, inspection, err := export.Inspect(m.tooth, system, ask.pin, ask.allowance)
+	g, inspection, err := export.Inspect(m.tooth, m.made.part.Bar.Height, system, ask.pin, ask.allowance)
 	m.made.inspection = inspection
 	if err != nil {
 		return m.refuse(err)

@@ -38,6 +38,17 @@ func TestReadersTakeRealGears(t *testing.T) {
 		"lines-tooth":     {"--module", "2", "--teeth", "24", "--curves", "lines", "--extent", "tooth"},
 		"lines-loose":     {"--module", "2", "--teeth", "12", "--curves", "lines", "--loose", "--tolerance", "10um"},
 		"lines-r12":       {"--module", "2", "--teeth", "24", "--curves", "lines", "--dxf", "r12"},
+		"ring":            {"ring", "--module", "2", "--teeth", "48", "--rim-diameter", "125", "--hole-circle", "4x5@114", "--label", "M2", "--reference"},
+		"ring-cut-inch":   {"ring", "--diametral-pitch", "12", "--teeth", "60", "--cutter-teeth", "28", "--rim-diameter", "6", "--tip-radius", "0.01"},
+		"ring-cubics":     {"ring", "--module", "2", "--teeth", "48", "--rim-diameter", "125", "--curves", "cubics"},
+		"ring-lines-r12":  {"ring", "--module", "1", "--teeth", "60", "--rim-diameter", "80", "--curves", "lines", "--dxf", "r12", "--tolerance", "5um"},
+		"ring-loose":      {"ring", "--module", "2", "--teeth", "48", "--rim-diameter", "125", "--loose", "--kerf", "0.3", "--lead-in", "2"},
+		"ring-tooth":      {"ring", "--module", "2", "--teeth", "48", "--extent", "tooth"},
+		"rack":            {"rack", "--diametral-pitch", "8", "--teeth", "12", "--height", "0.75in", "--reference", "--label", "M1"},
+		"rack-kerf":       {"rack", "--module", "2", "--teeth", "5", "--rack-ends", "tooth", "--kerf", "0.3", "--lead-in", "1", "--turn", "20"},
+		"rack-r12-loose":  {"rack", "--module", "2", "--teeth", "5", "--tip-chamfer", "0.2", "--dxf", "r12", "--loose"},
+		"rack-lines":      {"rack", "--module", "2", "--teeth", "5", "--tip-radius", "0.3", "--curves", "lines", "--kerf", "0.2"},
+		"rack-cubics":     {"rack", "--module", "2", "--teeth", "5", "--curves", "cubics", "--extent", "2"},
 		"lines-r12-space": {"--module", "2", "--teeth", "24", "--curves", "lines", "--dxf", "r12", "--extent", "space", "--loose"},
 	} {
 		t.Run(name, func(t *testing.T) {
@@ -45,11 +56,12 @@ func TestReadersTakeRealGears(t *testing.T) {
 			dir := t.TempDir()
 			for _, format := range []string{"dxf", "svg"} {
 				path := filepath.Join(dir, "gear."+format)
-				code, _, stderr := call(t, append([]string{"gear", "-o", path}, args...)...)
+				form, args := formOf(args)
+				code, _, stderr := call(t, append([]string{form, "-o", path}, args...)...)
 				if code != exitDone {
 					t.Fatalf("exit %d: %s", code, stderr)
 				}
-				made := makeFor(t, args)
+				made := makeFor(t, append([]string{form}, args...))
 				want := readertest.DXFExpect(made.drawing, made.dxf)
 				if format == "dxf" {
 					readertest.DXF(t, path, want)
@@ -61,18 +73,27 @@ func TestReadersTakeRealGears(t *testing.T) {
 	}
 }
 
-// makeFor makes the gear a command line asks for, in this process.
+// formOf takes the form off a list of arguments; a gear's needs not be named.
+func formOf(args []string) (form string, rest []string) {
+	if strings.HasPrefix(args[0], "-") {
+		return "gear", args
+	}
+	return args[0], args[1:]
+}
+
+// makeFor makes the part a command line asks for, in this process.
 func makeFor(t *testing.T, args []string) *partMade {
 	t.Helper()
-	cmd := newGear(streams{})
+	form, args := formOf(args)
+	cmd := newPart(streams{}, form)
 	flags := map[string]*text{}
-	for _, p := range partParameters("gear") {
+	for _, p := range partParameters(form) {
 		flags[p.name] = cmd.Flags().Lookup(p.name).Value.(*text)
 	}
 	if err := cmd.ParseFlags(args); err != nil {
 		t.Fatal(err)
 	}
-	job, err := resolvePart(newRequest("gear", flags))
+	job, err := resolvePart(newRequest(form, flags))
 	if err != nil {
 		t.Fatal(err)
 	}

@@ -36,6 +36,8 @@ type partJob struct {
 	// labelHeight is in mm; 0 takes the largest that fits.
 	labelHeight float64
 	measuring   measuring
+	rim         float64 // mm, outer diameter of a ring; 0 for none
+	height      float64 // mm, of a rack; 0 takes ours
 	input       map[string]any
 }
 
@@ -47,6 +49,12 @@ func (j partJob) make() (*partMade, error)   { return makePart(j) }
 func resolvePart(req request) (partJob, error) {
 	r := newReader(req)
 	var j partJob
+	switch req.command {
+	case "ring":
+		j.spec.Form = profile.FormRing
+	case "rack":
+		j.spec.Form = profile.FormRack
+	}
 	inch := r.size(&j)
 	r.teeth(&j)
 	r.rack(&j, inch)
@@ -178,6 +186,16 @@ func (r *reader) form(j *partJob) {
 	s.TipRadius, _ = r.length("tip-radius")
 	s.TipChamfer, _ = r.length("tip-chamfer")
 	s.MinTipThickness, _ = r.coefficient("min-tip-thickness")
+	if n, ok := r.count("cutter-teeth"); ok {
+		s.CutterTeeth = n
+		if n == 0 {
+			r.fail("cutter-teeth", "0", "must be above zero", "leave --cutter-teeth out for a root rounded by arcs")
+		}
+	}
+	s.CutterShift, _ = r.number("cutter-shift", "")
+	j.extent.HalfTeeth = r.choice("rack-ends", []string{"space", "tooth"}, "space") == "tooth"
+	j.rim = r.positive("rim-diameter")
+	j.height, _ = r.length("height")
 }
 
 // positive reads a length that must be above zero where it is given, since zero
@@ -231,9 +249,9 @@ func (r *reader) extent(j *partJob) {
 	if _, _, err := parseNumber(s); err != nil {
 		switch r.choice("extent", []string{"all", "tooth", "space"}, "all") {
 		case "tooth":
-			j.extent = fit.Extent{Kind: fit.ExtentTeeth, Teeth: 1}
+			j.extent.Kind, j.extent.Teeth = fit.ExtentTeeth, 1
 		case "space":
-			j.extent = fit.Extent{Kind: fit.ExtentSpace}
+			j.extent.Kind = fit.ExtentSpace
 		}
 		return
 	}
@@ -241,9 +259,9 @@ func (r *reader) extent(j *partJob) {
 	switch {
 	case !ok:
 	case n < 1 || n > j.spec.Teeth && j.spec.Teeth > 0:
-		r.fail("extent", s, "a gear of so many teeth has no such part",
+		r.fail("extent", s, "so many teeth have no such part",
 			fmt.Sprintf("give all, tooth, space, or 1 to %d teeth", j.spec.Teeth))
 	case n < j.spec.Teeth:
-		j.extent = fit.Extent{Kind: fit.ExtentTeeth, Teeth: n}
+		j.extent.Kind, j.extent.Teeth = fit.ExtentTeeth, n
 	}
 }

@@ -30,7 +30,7 @@ func printTable(out io.Writer, m *partMade) error {
 	fmt.Fprintln(&b)
 	w := tabwriter.NewWriter(&b, 0, 0, 2, ' ', 0)
 	fmt.Fprintln(w, "dimension\tsymbol\tmm\tinch")
-	rows := export.DimensionRows(m.part.Tooth.Dimensions)
+	rows := export.DimensionRows(m.part.Tooth)
 	spec := m.part.Tooth.Spec
 	rows = append(rows, export.RackRows(spec.Rack)...)
 	rows = append(rows,
@@ -94,9 +94,16 @@ func (m *partMade) reportLines() []string {
 	lines := []string{outlineLine(m)}
 	show := sidecar.Show(m.part.Unit)
 	if k := m.kerf; k != nil {
+		line := fmt.Sprintf("kerf %s: drawn is the path of the beam", show(profile.LengthOf(k.Width)))
 		tip := m.part.Tooth.Dimensions.TipDiameter
-		lines = append(lines, fmt.Sprintf("kerf %s: drawn is the path of the beam, tip diameter %s for the part's %s", show(profile.LengthOf(k.Width)),
-			show(profile.LengthOf(tip+k.Width)), show(profile.LengthOf(tip))))
+		drawn := tip + k.Width
+		if m.part.Tooth.Form == profile.FormRing {
+			drawn = tip - k.Width
+		}
+		if m.part.Tooth.Form != profile.FormRack {
+			line += fmt.Sprintf(", tip diameter %s for the part's %s", show(profile.LengthOf(drawn)), show(profile.LengthOf(tip)))
+		}
+		lines = append(lines, line)
 	}
 	var finest []string
 	for _, f := range m.features {

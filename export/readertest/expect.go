@@ -28,6 +28,7 @@ type Expect struct {
 	Layers   map[string]dxftest.Layer
 	Span     [4]float64 // least x, least y, greatest x, greatest y
 	PartArea float64    // closed outer loops less holes
+	Gross    float64    // closed outer loops and holes, which errors of readers go by
 	PartLen  float64    // all outer loops and holes, open ones too
 }
 
@@ -58,6 +59,9 @@ func DXFExpect(d export.Drawing, opt dxf.Options) Expect {
 		if closed {
 			l.Closed++
 			l.Area += area * f * f
+			if it.Role != export.Marker {
+				w.Gross += area * f * f
+			}
 			switch it.Role {
 			case export.Outer:
 				w.PartArea += area * f * f

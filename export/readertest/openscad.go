@@ -40,7 +40,7 @@ func openscadSVG(t *testing.T, path string, want Expect) {
 	if hasArcs(t, path) {
 		tolerance = 1e-2
 	}
-	if got := volume(t, model); !near(got, area, tolerance*area) {
+	if got := volume(t, model); !near(got, area, tolerance*want.Gross*mm*mm) {
 		t.Errorf("volume %v, want %v", got, area)
 	}
 }

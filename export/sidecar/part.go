@@ -66,10 +66,10 @@ func Of(m Made) *Document {
 	for _, r := range export.RackRows(m.Part.Tooth.Spec.Rack) {
 		doc.BasicRack[r.Key] = value(r.Value, r.Symbol, unit)
 	}
-	for _, r := range export.DimensionRows(m.Part.Tooth.Dimensions) {
+	for _, r := range export.DimensionRows(m.Part.Tooth) {
 		doc.Dimensions[r.Key] = value(r.Value, r.Symbol, unit)
 	}
-	doc.Inspection = inspection(m.Inspection, unit, false)
+	doc.Inspection = inspection(m.Inspection, unit, m.Part.Tooth.Form == profile.FormRack)
 	for _, r := range m.Drawing.Report() {
 		o := outline(r, unit)
 		if r.Tolerance > 0 {

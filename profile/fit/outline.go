@@ -10,8 +10,8 @@ import (
 
 // Outline is the edge of that extent, turned by turn in rad about the origin, with the
 // material on the left for a gear or rack, on the right for a ring. The whole outline of
-// a gear or ring is closed and starts in the middle of a land, the place where a closing
-// segment harms least; that of a rack is an open chain, which Rack closes.
+// a gear or ring is closed and starts in the middle of the tip of tooth 1, the place where
+// a closing segment harms least; that of a rack is an open chain, which Rack closes.
 //
 // Tooth 1 is on +Y. A ring's outline is one of spaces, which stand half a pitch beside
 // its teeth; a rack's teeth follow each other towards +X, against the way of travel.
@@ -44,7 +44,7 @@ func (f *Tooth) span(e Extent) (teeth, spaces int) {
 		return 0, e.Teeth
 	case e.Kind == ExtentTeeth:
 		return e.Teeth, 0
-	case rack && !e.HalfTeeth:
+	case ring || rack && !e.HalfTeeth:
 		return f.exact.Teeth, 0
 	}
 	return 0, f.exact.Teeth
@@ -54,10 +54,10 @@ func (f *Tooth) span(e Extent) (teeth, spaces int) {
 func (f *Tooth) first(n int, e Extent) float64 {
 	switch f.exact.Form {
 	case profile.FormRing:
-		if e.Kind == ExtentSpace {
-			return 0.5
+		if e.Kind == ExtentTeeth {
+			return -0.5
 		}
-		return -0.5
+		return 0.5
 	case profile.FormRack:
 		if teeth, _ := f.span(e); teeth > 0 {
 			return float64(1 - n)

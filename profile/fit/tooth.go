@@ -90,12 +90,12 @@ func (f *Tooth) ArcLimit(e Extent) int {
 	teeth, spaces := f.span(e)
 	sides := 2 * f.sideLimit
 	switch {
+	case !e.Partial() && f.exact.Form != profile.FormRack:
+		return (teeth + spaces) * (f.landLimit + sides + f.rootLimit)
 	case teeth > 0:
 		return teeth*(f.landLimit+sides) + (teeth+1)*f.rootLimit
-	case e.Partial():
-		return (spaces+1)*f.landLimit + spaces*(sides+f.rootLimit)
 	}
-	return spaces * (f.landLimit + sides + f.rootLimit)
+	return (spaces+1)*f.landLimit + spaces*(sides+f.rootLimit)
 }
 
 // absorbShort removes segments shorter than ShortestSegment; a neighbour takes

@@ -12,7 +12,7 @@ import (
 // circles, along their exact curves, and takes them off the pitch.
 func TestBacklashOnTheCurves(t *testing.T) {
 	one, two := tooth(t, "iso53-a", 2, 24, 0.2, 0.05), tooth(t, "iso53-a", 2, 61, 0.1, 0.08)
-	g, mate := must(t, gauge.OfTooth(one)), must(t, gauge.OfTooth(two))
+	g, mate := must(t, gauge.OfTooth(one, 0)), must(t, gauge.OfTooth(two, 0))
 	for _, center := range []float64{85.5, 85.7, 86} {
 		got, err := g.Backlash(mate, center)
 		if err != nil {
@@ -37,7 +37,7 @@ func TestBacklashOnTheCurves(t *testing.T) {
 // TestBacklashOfThinning uses that at the reference center distance the backlash of
 // unshifted gears is what their teeth are thinned by.
 func TestBacklashOfThinning(t *testing.T) {
-	g, mate := must(t, gauge.OfTooth(tooth(t, "iso53-a", 2, 24, 0, 0))), must(t, gauge.OfTooth(tooth(t, "iso53-a", 2, 61, 0, 0)))
+	g, mate := must(t, gauge.OfTooth(tooth(t, "iso53-a", 2, 24, 0, 0), 0)), must(t, gauge.OfTooth(tooth(t, "iso53-a", 2, 61, 0, 0), 0))
 	got, err := thicker(t, g, g.Thickness()-0.07).Backlash(mate, 85)
 	if err != nil {
 		t.Fatal(err)
@@ -47,7 +47,7 @@ func TestBacklashOfThinning(t *testing.T) {
 
 // TestBacklashRefusals asks for what cannot mesh.
 func TestBacklashRefusals(t *testing.T) {
-	g, finer := must(t, gauge.OfTooth(tooth(t, "iso53-a", 2, 24, 0, 0))), must(t, gauge.OfTooth(tooth(t, "iso53-a", 1.5, 24, 0, 0)))
+	g, finer := must(t, gauge.OfTooth(tooth(t, "iso53-a", 2, 24, 0, 0), 0)), must(t, gauge.OfTooth(tooth(t, "iso53-a", 1.5, 24, 0, 0), 0))
 	ring := must(t, gauge.Spec{Kind: gauge.Ring, Module: 2, Teeth: 80, PressureAngle: 20 * degree, Tip: 78, TipForm: 78, Form: 82})
 	for name, tc := range map[string]struct {
 		err  error

@@ -15,7 +15,7 @@ func exampleGear() gauge.Gear {
 	if err != nil {
 		panic(err)
 	}
-	g, err := gauge.New(gauge.OfTooth(tooth))
+	g, err := gauge.New(gauge.OfTooth(tooth, 0))
 	if err != nil {
 		panic(err)
 	}

@@ -34,10 +34,19 @@ type Spec struct {
 	Back float64 // mm, from a rack's datum line to its back; 0 measures from the datum line
 }
 
-// OfTooth are the numbers of a solved external gear.
-func OfTooth(t *profile.Tooth) Spec {
+// OfTooth are the numbers of a solved gear, ring or rack; back is how far a rack's back
+// lies below its datum line in mm.
+func OfTooth(t *profile.Tooth, back float64) Spec {
 	d := t.Dimensions
-	return Spec{Kind: External, Module: d.Module, Teeth: d.Teeth,
+	if t.Form == profile.FormRack {
+		return Spec{Kind: Rack, Module: d.Module, PressureAngle: t.Spec.Rack.PressureAngle, ProfileShift: t.Spec.ProfileShift, Thinning: t.Spec.Thinning,
+			Tip: d.Addendum, TipForm: d.TipFormHeight, Form: d.FormHeight, Root: -d.Dedendum, Back: back}
+	}
+	kind := External
+	if t.Form == profile.FormRing {
+		kind = Ring
+	}
+	return Spec{Kind: kind, Module: d.Module, Teeth: d.Teeth,
 		PressureAngle: t.Spec.Rack.PressureAngle, ProfileShift: t.Spec.ProfileShift, Thinning: t.Spec.Thinning,
 		Tip: d.TipDiameter / 2, TipForm: d.TipFormDiameter / 2, Form: d.FormDiameter / 2, Root: d.RootDiameter / 2}
 }

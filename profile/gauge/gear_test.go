@@ -11,7 +11,7 @@ import (
 // plain is an ordinary gear's numbers.
 func plain(t testing.TB) gauge.Spec {
 	t.Helper()
-	return gauge.OfTooth(tooth(t, "iso53-a", 2, 28, 0, 0))
+	return gauge.OfTooth(tooth(t, "iso53-a", 2, 28, 0, 0), 0)
 }
 
 // TestNewRefusals breaks one number after the other.

@@ -106,7 +106,7 @@ func TestIdentifyTellsWhenNothingExplains(t *testing.T) {
 // far beyond the uncertainty: the true gear must not be an answer.
 func TestIdentifyOneReadingContradicts(t *testing.T) {
 	solved := tooth(t, "iso53-a", 3, 30, 0.2, 0.05)
-	g := must(t, gauge.OfTooth(solved))
+	g := must(t, gauge.OfTooth(solved, 0))
 	spans, err := g.Spans()
 	if err != nil {
 		t.Fatal(err)

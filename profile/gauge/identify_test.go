@@ -47,7 +47,7 @@ func madeUp(r *rand.Rand, pins bool) (worn, bool) {
 	if err != nil {
 		return worn{}, false
 	}
-	g, err := gauge.New(gauge.OfTooth(solved))
+	g, err := gauge.New(gauge.OfTooth(solved, 0))
 	if err != nil {
 		return worn{}, false
 	}

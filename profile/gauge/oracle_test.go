@@ -110,7 +110,7 @@ func TestMeasuringTheCurves(t *testing.T) {
 	r := rand.New(rand.NewPCG(2, 3))
 	for range 60 {
 		solved := randomTooth(r)
-		g := must(t, gauge.OfTooth(solved))
+		g := must(t, gauge.OfTooth(solved, 0))
 		z := float64(solved.Teeth)
 		scale := solved.Dimensions.TipDiameter
 		if fits, err := g.PinRange(); err == nil {
@@ -162,7 +162,7 @@ func TestPinsKeepOffTheRoot(t *testing.T) {
 	r := rand.New(rand.NewPCG(4, 5))
 	for range 60 {
 		solved := randomTooth(r)
-		g := must(t, gauge.OfTooth(solved))
+		g := must(t, gauge.OfTooth(solved, 0))
 		fits, err := g.PinRange()
 		if err != nil {
 			continue

@@ -82,7 +82,7 @@ func TestStockPins(t *testing.T) {
 	}
 	near(t, "module 1, 20 teeth", stock(full(t, gauge.External, 1, 20, 20*degree, 0), gauge.Metric), 1.7, 0)
 	near(t, "4 P, 32 teeth", stock(full(t, gauge.External, inch/4, 32, 20*degree, 0), gauge.Inch), 0.432*inch, 1e-12)
-	long := gauge.OfTooth(tooth(t, "full-depth-20", inch/4, 12, 0.5, 0))
+	long := gauge.OfTooth(tooth(t, "full-depth-20", inch/4, 12, 0.5, 0), 0)
 	near(t, "long addendum pinion", stock(must(t, long), gauge.Inch), 0.48*inch, 1e-12) // 1.92/P
 	near(t, "4 P ring", stock(full(t, gauge.Ring, inch/4, 60, 20*degree, 0), gauge.Inch), 0.42*inch, 1e-12)
 	for _, s := range someGears(t) {

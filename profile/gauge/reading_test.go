@@ -15,7 +15,7 @@ func someGears(t testing.TB) []gauge.Spec {
 	r := rand.New(rand.NewPCG(8, 9))
 	var all []gauge.Spec
 	for range 40 {
-		all = append(all, gauge.OfTooth(randomTooth(r)))
+		all = append(all, gauge.OfTooth(randomTooth(r), 0))
 		alpha := (17 + 8*r.Float64()) * degree
 		all = append(all, gauge.Spec{Kind: gauge.Rack, Module: 3, PressureAngle: alpha, ProfileShift: 0.2 * r.Float64(), Thinning: 0.1 * r.Float64(),
 			Tip: 3, TipForm: 2.9, Form: -3, Root: -3.75, Back: 30 * r.Float64()})
@@ -85,8 +85,8 @@ func TestReadingsInvertMeasurements(t *testing.T) {
 
 // TestReadingsRefuseNonsense reads values that no such gear can give.
 func TestReadingsRefuseNonsense(t *testing.T) {
-	g := must(t, gauge.OfTooth(tooth(t, "iso53-a", 2, 28, 0, 0)))
-	large := must(t, gauge.OfTooth(tooth(t, "iso53-a", 2, 60, 0, 0)))
+	g := must(t, gauge.OfTooth(tooth(t, "iso53-a", 2, 28, 0, 0), 0))
+	large := must(t, gauge.OfTooth(tooth(t, "iso53-a", 2, 60, 0, 0), 0))
 	for name, tc := range map[string]struct {
 		err  error
 		rule profile.Rule
@@ -155,7 +155,7 @@ func TestLimits(t *testing.T) {
 			near(t, "chord allowance", l.Largest-l.Smallest, 0.05, 0.005)
 		}
 	}
-	g := must(t, gauge.OfTooth(tooth(t, "iso53-a", 2, 28, 0, 0)))
+	g := must(t, gauge.OfTooth(tooth(t, "iso53-a", 2, 28, 0, 0), 0))
 	for name, tc := range map[string]struct {
 		a    gauge.Allowance
 		rule profile.Rule
