@@ -17,6 +17,7 @@ var layers = []string{
 	"profile/gauge",
 	"profile/body",
 	"profile/fit",
+	"profile/mesh",
 	"profile/label",
 	"export",
 	"export/fixed",

@@ -64,21 +64,18 @@ func (w *rowMaker) prepare(r *rowResult, memory *pages) ([]files.File, error) {
 	if err != nil {
 		return nil, err
 	}
-	o := output{}
-	for _, format := range w.formats {
-		o.paths = append(o.paths, r.row.name+"."+format)
-	}
-	set, err := o.render(made, memory)
+	suffixes := job.suffixes()
+	set, err := renderSheets(made, memory, w.formats, func(i int) string { return r.row.name + suffixes[i] })
 	if err != nil {
 		return nil, err
 	}
-	text, err := made.document.Append(memory.sidecar[:0])
+	text, err := made.document().Append(memory.sidecar[:0])
 	if err != nil {
 		return nil, err
 	}
 	memory.sidecar = text
 	own := files.File{Name: r.row.name + ".json", Data: text}
-	r.listed = made.document.FamilyRow(r.row.Line, r.row.name, r.row.form.name, described(own))
+	r.listed = made.document().FamilyRow(r.row.Line, r.row.name, r.row.form.name, described(own))
 	return append(set, own), nil
 }
 
@@ -102,11 +99,20 @@ func (w *rowMaker) standing(row tableRow, j job) (listed sidecar.FamilyRow, ok b
 		return listed, false
 	}
 	doc, err := sidecar.Read(text)
-	if err != nil || doc.Program != program() || len(doc.Files) != len(w.formats) || !sameInput(doc.Input, j.normalized()) {
+	if err != nil || doc.Program != program() || !sameInput(doc.Input, j.normalized()) {
+		return listed, false
+	}
+	var names []string
+	for _, suffix := range j.suffixes() {
+		for _, format := range w.formats {
+			names = append(names, row.name+suffix+"."+format)
+		}
+	}
+	if len(doc.Files) != len(names) {
 		return listed, false
 	}
 	for i, f := range doc.Files {
-		if f.Name != row.name+"."+w.formats[i] || f.Format != w.formats[i] {
+		if f.Name != names[i] || f.Format != formatOf(f.Name) {
 			return listed, false
 		}
 		data, err := w.read(f.Name, f.Bytes)

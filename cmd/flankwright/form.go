@@ -1,5 +1,13 @@
 package main
 
+import (
+	"slices"
+
+	"flankwright/export"
+	"flankwright/export/dxf"
+	"flankwright/export/sidecar"
+)
+
 // form is one kind of part: a command of its own, and a form of rows in a table.
 type form struct {
 	name       string
@@ -11,8 +19,25 @@ type form struct {
 type job interface {
 	// normalized is the request as the sidecar keeps it.
 	normalized() map[string]any
-	make() (*partMade, error)
+	make() (product, error)
+	// suffixes tell the drawings of one job apart, behind a row's name.
+	suffixes() []string
 }
+
+// product is what a job makes, ready to be written.
+type product interface {
+	document() *sidecar.Document
+	sheets() []sheetOf
+}
+
+// sheetOf is one drawing, with how it is written as DXF.
+type sheetOf struct {
+	drawing export.Drawing
+	dxf     dxf.Options
+}
+
+// pairForm is the name of a pair in a table.
+const pairForm = "pair"
 
 // forms are the kinds of part that there are.
 func forms() []form {
@@ -21,7 +46,12 @@ func forms() []form {
 	for _, name := range []string{"gear", "ring", "rack"} {
 		list = append(list, form{name, func() []parameter { return partParameters(name) }, resolve})
 	}
-	return list
+	return append(list, form{pairForm, pairParameters, func(r request) (job, error) { return resolvePair(r) }})
+}
+
+// partForms are the forms that are one part each.
+func partForms() []string {
+	return slices.DeleteFunc(formNames(), func(name string) bool { return name == pairForm })
 }
 
 // formNames are the names of all forms.

@@ -15,7 +15,7 @@ const groupGauge group = "Measuring"
 // gaugeParameters are the flags of the gauge command besides those of the parts.
 func gaugeParameters() []parameter {
 	return []parameter{
-		{name: "form", group: groupForm, value: "FORM", usage: "gear, ring or rack (default gear)", choices: formNames()},
+		{name: "form", group: groupForm, value: "FORM", usage: "gear, ring or rack (default gear)", choices: partForms()},
 		{name: "pin-diameter", group: groupGauge, value: "L", usage: "of pins or balls (default the nearest kept in stock)"},
 		{name: "thickness-allowance", group: groupGauge, value: "A", usage: "UPPER,LOWER deviation of the tooth thickness, or a series of DIN 3967 such as cd25; gives limits"},
 		{name: "flank-class", group: groupGauge, value: "N", usage: "flank tolerance class of ISO 1328-1, 1 to 11"},
@@ -61,7 +61,7 @@ from its teeth, tip diameter, and spans over two numbers of teeth.
 	}
 	var params []parameter
 	seen := map[string]bool{}
-	for _, form := range formNames() {
+	for _, form := range partForms() {
 		for _, p := range measuredParameters(form) {
 			if !seen[p.name] {
 				seen[p.name] = true
@@ -79,7 +79,7 @@ from its teeth, tip diameter, and spans over two numbers of teeth.
 
 // groupRank puts groups in the order of the help.
 func groupRank(g group) int {
-	return slices.Index([]group{groupSize, groupForm, groupBody, groupGauge, groupDrawing, groupCut, groupFamily, groupOutput}, g)
+	return slices.Index([]group{groupSize, groupForm, groupPair, groupBody, groupGauge, groupDrawing, groupCut, groupFamily, groupOutput}, g)
 }
 
 // runGauge prints what the part is inspected by.
@@ -96,7 +96,7 @@ func runGauge(_ context.Context, io streams, req request) error {
 		}
 		r = newReader(req)
 	}
-	form := r.choice("form", formNames(), "gear")
+	form := r.choice("form", partForms(), "gear")
 	if r.found != nil {
 		return r.found
 	}
@@ -115,7 +115,7 @@ func runGauge(_ context.Context, io streams, req request) error {
 		return err
 	}
 	job.input["command"], job.input["form"] = "gauge", form
-	made, err := job.make()
+	made, err := makePart(job)
 	if err != nil {
 		return err
 	}
@@ -123,7 +123,7 @@ func runGauge(_ context.Context, io streams, req request) error {
 		warn(io.err, made.warnings, sidecar.Show(made.part.Unit))
 	}
 	if show.json {
-		document, err := made.document.Marshal()
+		document, err := made.doc.Marshal()
 		if err != nil {
 			return problems{{message: "the sidecar cannot be written: " + err.Error(), exit: exitFailed}}
 		}
@@ -138,7 +138,7 @@ func runGauge(_ context.Context, io streams, req request) error {
 
 // withDrawing takes the sidecar of a drawing, or of this command, as defaults.
 func withDrawing(req request, path string) (request, error) {
-	defaults, err := readSidecar(path, append(allParameters(), gaugeParameters()...), append([]string{"gauge"}, formNames()...)...)
+	defaults, err := readSidecar(path, append(allParameters(), gaugeParameters()...), append([]string{"gauge"}, partForms()...)...)
 	if err != nil {
 		return req, err
 	}

@@ -16,7 +16,7 @@ import (
 func printGauge(out io.Writer, m *partMade) error {
 	var b strings.Builder
 	fmt.Fprintf(&b, "%s\n", m.title())
-	fmt.Fprintf(&b, "basic rack %s: %s\n", m.document.BasicRack["name"], m.document.BasicRack["source"])
+	fmt.Fprintf(&b, "basic rack %s: %s\n", m.doc.BasicRack["name"], m.doc.BasicRack["source"])
 	show := sidecar.Show(m.part.Unit)
 	d := m.part.Tooth.Dimensions
 	if m.part.Tooth.Form == profile.FormRack {

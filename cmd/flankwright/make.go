@@ -24,12 +24,15 @@ type partMade struct {
 	features []body.Feature
 	drawing  export.Drawing
 	dxf      dxf.Options
-	document *sidecar.Document
+	doc      *sidecar.Document
 	warnings []profile.Finding
 	choices  []sidecar.Chosen
 
 	inspection export.Inspection
 }
+
+func (m *partMade) document() *sidecar.Document { return m.doc }
+func (m *partMade) sheets() []sheetOf           { return []sheetOf{{m.drawing, m.dxf}} }
 
 // maker collects what the geometry refuses and warns of while a gear is made.
 type maker struct {
@@ -73,7 +76,7 @@ func makePart(j partJob) (*partMade, error) {
 	made := m.made
 	made.drawing = made.part.Drawing()
 	made.warnings = m.warnings
-	made.document = sidecar.Of(sidecar.Made{Program: program(), Input: j.input, Rack: j.rack, Part: made.part, Drawing: made.drawing,
+	made.doc = sidecar.Of(sidecar.Made{Program: program(), Input: j.input, Rack: j.rack, Part: made.part, Drawing: made.drawing,
 		Features: made.features, Kerf: made.kerf, Choices: made.choices, Warnings: m.warnings, Inspection: made.inspection})
 	return made, nil
 }

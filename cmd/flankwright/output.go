@@ -95,7 +95,7 @@ func (o output) deliver(ctx context.Context, io streams, m *partMade) error {
 	if err != nil {
 		return err
 	}
-	document, err := m.document.Marshal()
+	document, err := m.doc.Marshal()
 	if err != nil {
 		return problems{{message: "the sidecar cannot be written: " + err.Error(), exit: exitFailed}}
 	}
@@ -120,24 +120,44 @@ func (o output) deliver(ctx context.Context, io streams, m *partMade) error {
 	return o.printFiles(io, m, set)
 }
 
-// render makes the bytes of each drawing, in the memory of p, and enters them in the
+// render makes the bytes of the drawings, in the memory of p, and enters them in the
 // sidecar.
 func (o output) render(m *partMade, p *pages) ([]files.File, error) {
-	if len(o.paths) == 0 {
+	var formats []string
+	for _, path := range o.paths {
+		formats = append(formats, formatOf(path))
+	}
+	next := 0
+	return renderAll(m, p, formats, func(int, string) string { next++; return o.paths[next-1] })
+}
+
+// renderSheets makes the bytes of a product's drawings in each format, named by their
+// base names.
+func renderSheets(m product, p *pages, formats []string, base func(sheet int) string) ([]files.File, error) {
+	return renderAll(m, p, formats, func(i int, format string) string { return base(i) + "." + format })
+}
+
+func renderAll(m product, p *pages, formats []string, name func(sheet int, format string) string) ([]files.File, error) {
+	var set []files.File
+	if len(formats) == 0 {
 		return nil, nil
 	}
-	if err := p.sheet.Set(m.drawing); err != nil {
-		return nil, drawingFailed(o.paths[0], err)
-	}
-	var set []files.File
-	for i, path := range o.paths {
-		data, err := m.write((*p.drawing(i))[:0], &p.sheet, formatOf(path))
-		if err != nil {
-			return nil, drawingFailed(path, err)
+	doc := m.document()
+	for i, s := range m.sheets() {
+		if err := p.sheet.Set(s.drawing); err != nil {
+			return nil, drawingFailed(name(i, formats[0]), err)
 		}
-		*p.drawing(i) = data
-		set = append(set, files.File{Name: path, Data: data})
-		m.document.Files = append(m.document.Files, described(files.File{Name: path, Data: data}))
+		for _, format := range formats {
+			path := name(i, format)
+			memory := p.drawing(len(set))
+			data, err := s.write((*memory)[:0], &p.sheet, format)
+			if err != nil {
+				return nil, drawingFailed(path, err)
+			}
+			*memory = data
+			set = append(set, files.File{Name: path, Data: data})
+			doc.Files = append(doc.Files, described(files.File{Name: path, Data: data}))
+		}
 	}
 	return set, nil
 }
@@ -153,11 +173,11 @@ func drawingFailed(path string, err error) error {
 }
 
 // write appends the sheet in the format.
-func (m *partMade) write(dst []byte, s *sheet.Sheet, format string) ([]byte, error) {
+func (o sheetOf) write(dst []byte, s *sheet.Sheet, format string) ([]byte, error) {
 	if format == "svg" {
 		return svg.AppendSheet(dst, s, svg.Options{})
 	}
-	return dxf.AppendSheet(dst, s, m.dxf)
+	return dxf.AppendSheet(dst, s, o.dxf)
 }
 
 // printFiles reports what was written, with the size to check after import.

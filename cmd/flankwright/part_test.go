@@ -27,7 +27,7 @@ func BenchmarkGear(b *testing.B) {
 				if err != nil {
 					b.Fatal(err)
 				}
-				if memory.sidecar, err = made.document.Append(memory.sidecar[:0]); err != nil {
+				if memory.sidecar, err = made.doc.Append(memory.sidecar[:0]); err != nil {
 					b.Fatal(err)
 				}
 				bytes := len(memory.sidecar)

@@ -155,7 +155,7 @@ func TestFromTakesItsOwnInput(t *testing.T) {
 	if err != nil {
 		t.Fatal(err)
 	}
-	again, err := made.document.Marshal()
+	again, err := made.doc.Marshal()
 	if err != nil {
 		t.Fatal(err)
 	}

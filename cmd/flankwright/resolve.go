@@ -42,7 +42,8 @@ type partJob struct {
 }
 
 func (j partJob) normalized() map[string]any { return j.input }
-func (j partJob) make() (*partMade, error)   { return makePart(j) }
+func (j partJob) make() (product, error)     { return makePart(j) }
+func (j partJob) suffixes() []string         { return []string{""} }
 
 // resolvePart reads a request for a gear. All that is malformed is reported
 // together.

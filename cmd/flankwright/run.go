@@ -69,6 +69,6 @@ sidecar of dimensions. What cannot be made is refused, with what would work.`,
 	root.SetErr(io.err)
 	root.SetFlagErrorFunc(flagError)
 	root.SetUsageFunc(usage)
-	root.AddCommand(newPart(io, "gear"), newPart(io, "ring"), newPart(io, "rack"), newFamily(io), newGauge(io), newBasicRacks(io), newVersion(io), newSidecarTopic(), newFamilyTopic())
+	root.AddCommand(newPart(io, "gear"), newPart(io, "ring"), newPart(io, "rack"), newPair(io), newFamily(io), newGauge(io), newBasicRacks(io), newVersion(io), newSidecarTopic(), newFamilyTopic())
 	return root
 }

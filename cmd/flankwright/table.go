@@ -23,7 +23,7 @@ const (
 func printTable(out io.Writer, m *partMade) error {
 	var b strings.Builder
 	fmt.Fprintf(&b, "%s\n", m.title())
-	fmt.Fprintf(&b, "basic rack %s: %s\n", m.document.BasicRack["name"], m.document.BasicRack["source"])
+	fmt.Fprintf(&b, "basic rack %s: %s\n", m.doc.BasicRack["name"], m.doc.BasicRack["source"])
 	for _, line := range sizeNotes(m.part.Tooth.Dimensions.Module) {
 		fmt.Fprintln(&b, line)
 	}

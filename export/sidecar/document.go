@@ -32,8 +32,10 @@ type Document struct {
 	Input      map[string]any      `json:"input"`
 	Unit       string              `json:"unit"`
 	BasicRack  map[string]any      `json:"basic_rack"`
-	Dimensions map[string]any      `json:"dimensions"`
-	Inspection *Inspection         `json:"inspection"`
+	Dimensions map[string]any      `json:"dimensions,omitempty"` // of a part
+	Inspection *Inspection         `json:"inspection,omitempty"` // likewise
+	Members    []Member            `json:"members,omitempty"`    // of a pair
+	Mesh       *Mesh               `json:"mesh,omitempty"`       // likewise
 	Outline    map[string]*Outline `json:"outline"`
 	Kerf       *Kerf               `json:"kerf,omitempty"`
 	Features   []Feature           `json:"features"`
@@ -176,9 +178,14 @@ func value(q profile.Quantity, symbol string, unit export.Unit) any {
 	case profile.Length:
 		return length(q.Value, symbol, unit)
 	case profile.Angle:
-		return Value{Decimal(q.Value * 180 / math.Pi), "deg", symbol}
+		return degrees(q.Value, symbol)
 	}
 	return Decimal(q.Value)
+}
+
+// degrees gives an angle of rad.
+func degrees(rad float64, symbol string) Value {
+	return Value{Decimal(rad * 180 / math.Pi), "deg", symbol}
 }
 
 // length gives a length of mm in the unit of the drawing.

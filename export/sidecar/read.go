@@ -21,6 +21,14 @@ func Read(data []byte) (*Document, error) {
 	for key, v := range d.BasicRack {
 		d.BasicRack[key] = quantity(v)
 	}
+	for _, m := range d.Members {
+		for key, v := range m.Dimensions {
+			m.Dimensions[key] = quantity(v)
+		}
+		for key, v := range m.BasicRack {
+			m.BasicRack[key] = quantity(v)
+		}
+	}
 	for i := range d.Choices {
 		d.Choices[i].Value = quantity(d.Choices[i].Value)
 	}
