@@ -249,8 +249,8 @@ func (m *pairMade) print(out io.Writer, set []files.File) error {
 	if m.kerfed {
 		edge = "curves as the beam leaves them"
 	}
-	fmt.Fprintf(&b, "\nproof on the %s, rolled through a pitch: transmission error %s (their tolerances allow %s), backlash %s, smallest gap from tip to root %s, no overlap\n",
-		edge, micrometres(m.drawn.Error), micrometres(m.bound), length(m.drawn.Backlash), length(m.drawn.Gap))
+	fmt.Fprintf(&b, "\nproof on the %s, rolled through a pitch: transmission error %s (their tolerances allow %s), backlash %s, smallest gap from tip to root %s, overlap %s\n",
+		edge, micrometres(m.drawn.Error), micrometres(m.bound), length(m.drawn.Backlash), length(m.drawn.Gap), micrometres(m.drawn.Overlap))
 	for _, f := range set {
 		fmt.Fprintf(&b, "wrote %s, %d bytes\n", f.Name, len(f.Data))
 	}
