@@ -17,6 +17,9 @@ import (
 // TestKerfMovedBack writes part and path, and has a general geometry library move the
 // path back by half the kerf: it must come out on the part.
 func TestKerfMovedBack(t *testing.T) {
+	if raceDetector {
+		t.Skip("asked without the race detector")
+	}
 	for name, c := range map[string]struct {
 		kerf float64 // in the unit of the drawing
 		args []string
@@ -59,6 +62,9 @@ func TestKerfMovedBack(t *testing.T) {
 // TestBrowserFillsThePart: a browser's point-in-fill agrees with the exact loops on 1000
 // points.
 func TestBrowserFillsThePart(t *testing.T) {
+	if raceDetector {
+		t.Skip("asked without the race detector")
+	}
 	args := []string{"--module", "2", "--teeth", "60", "--bore", "20", "--keyway", "iso", "--hole-circle", "6x4@40", "--windows", "6",
 		"--hub-diameter", "52", "--turn", "5"}
 	dir := t.TempDir()

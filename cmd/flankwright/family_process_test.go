@@ -108,6 +108,9 @@ func TestFamilyInterrupted(t *testing.T) {
 
 // TestFamilyMemoryIsFlat: a table of 100,000 rows takes no more memory than its workers.
 func TestFamilyMemoryIsFlat(t *testing.T) {
+	if raceDetector {
+		t.Skip("asked without the race detector")
+	}
 	rows := 100_000
 	if testing.Short() {
 		rows = 5_000

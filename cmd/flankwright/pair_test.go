@@ -35,6 +35,9 @@ func pairSidecar(t *testing.T, args ...string) (dir string, doc *sidecar.Documen
 // assembly says touch without overlap, are free when turned by half of the backlash, touch
 // again at all of it, and overlap beyond.
 func TestAssemblyTouches(t *testing.T) {
+	if raceDetector {
+		t.Skip("asked without the race detector")
+	}
 	for name, args := range map[string][]string{
 		"gears":    {"--module", "2", "--teeth", "17,43", "--center-distance", "61", "--backlash", "0.1"},
 		"gears cw": {"--module", "2", "--teeth", "17,43", "--profile-shift", "0.3,-0.1", "--backlash", "0.1", "--drive", "cw"},

@@ -15,6 +15,9 @@ import (
 // TestReadersTakeRealGears writes gears as the command does and has every outside
 // reader compare loops, closure, area, unit and layers.
 func TestReadersTakeRealGears(t *testing.T) {
+	if raceDetector {
+		t.Skip("asked without the race detector")
+	}
 	for name, args := range map[string][]string{
 		"metric":   {"--module", "2", "--teeth", "24", "--bore", "10"},
 		"inch":     {"--diametral-pitch", "16", "--teeth", "30", "--profile-shift", "0.2", "--thinning", "0.003", "--reference"},
