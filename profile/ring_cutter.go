@@ -59,28 +59,9 @@ func (g ringSpace) gouges(c cutter) bool {
 	return g.rb*rollAt(g.tipRadius, g.rb) < c.distance*math.Sin(c.operating)
 }
 
-// trims says whether the cutter, fed in radially, cuts corners off the ring's teeth
-// (SDP/SI, Elements of Metric Gear Technology, equations 5-8 and 5-9, trimming interference
-// with the cutter as the pinion):
-//
-//	theta_1 + inv a_a1 - inv a_w >= (z_2/z_1) (theta_2 + inv a_a2 - inv a_w)
-//	theta_1 = asin sqrt((1 - (cos a_a1/cos a_a2)^2)/(1 - (z_1/z_2)^2))
-//	theta_2 = asin sqrt(((cos a_a2/cos a_a1)^2 - 1)/((z_2/z_1)^2 - 1))
-//
-// keeps them whole.
+// trims says whether the cutter, fed in radially, cuts corners off the ring's teeth.
 func (g ringSpace) trims(c cutter, teeth int) bool {
-	z1, z2 := float64(c.teeth), float64(teeth)
-	cos1, cos2 := c.rb/c.tipRadius, g.rb/g.tipRadius
-	square := func(v float64) float64 { return v * v }
-	sin1 := (1 - square(cos1/cos2)) / (1 - square(z1/z2))
-	sin2 := (square(cos2/cos1) - 1) / (square(z2/z1) - 1)
-	if !(sin1 >= 0 && sin1 <= 1 && sin2 >= 0 && sin2 <= 1) {
-		return true // so near each other in size that no position clears
-	}
-	inv := Inv(c.operating)
-	one := math.Asin(math.Sqrt(sin1)) + Inv(math.Acos(cos1)) - inv
-	two := math.Asin(math.Sqrt(sin2)) + Inv(math.Acos(cos2)) - inv
-	return !(one >= z2/z1*two) // true as well where there is no operating angle
+	return !InRing{Teeth: [2]int{c.teeth, teeth}, Base: [2]float64{c.rb, g.rb}, Tip: [2]float64{c.tipRadius, g.tipRadius}, Angle: c.operating}.PassesRadially()
 }
 
 // fault is what keeps a cutter from the ring; "" if nothing does.

@@ -14,6 +14,7 @@ import (
 // may import packages above its own line only.
 var layers = []string{
 	"profile",
+	"profile/internal/bisect",
 	"profile/gauge",
 	"profile/body",
 	"profile/fit",

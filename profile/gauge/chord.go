@@ -4,6 +4,7 @@ import (
 	"math"
 
 	"flankwright/profile"
+	"flankwright/profile/internal/bisect"
 )
 
 // Chord is a tooth's thickness along a straight line, as a gear-tooth caliper takes
@@ -59,7 +60,7 @@ func (g Gear) ChordAt(height float64) (Chord, error) {
 			Hint: "set it to a height from {bound} to {0}"}}
 	}
 	low, high := g.flank()
-	at := bisected(func(at float64) float64 { return g.heightOf(at) - height }, low, high)
+	at := bisect.Root(func(at float64) float64 { return g.heightOf(at) - height }, low, high)
 	return Chord{Thickness: g.chordOf(at), Height: height, Contact: g.contact(at)}, nil
 }
 

@@ -5,6 +5,7 @@ import (
 	"slices"
 
 	"flankwright/profile"
+	"flankwright/profile/internal/bisect"
 )
 
 // SpanReading is a span in mm measured over so many teeth.
@@ -212,5 +213,5 @@ func (m Measurements) uncertaintyFor(c candidate, limit float64) float64 {
 	if explains(most) < 0 {
 		return math.Inf(1)
 	}
-	return bisected(explains, m.Uncertainty, most)
+	return bisect.Root(explains, m.Uncertainty, most)
 }

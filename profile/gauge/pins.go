@@ -4,6 +4,7 @@ import (
 	"math"
 
 	"flankwright/profile"
+	"flankwright/profile/internal/bisect"
 )
 
 // Pins is a measurement over two pins or balls in opposite spaces of an external
@@ -209,7 +210,7 @@ func (g Gear) pinRange() (PinRange, profile.Violations) {
 			return PinRange{}, none
 		}
 		if !(room(smallest) > 0) {
-			smallest = bisected(room, smallest, largest)
+			smallest = bisect.Root(room, smallest, largest)
 		}
 	}
 	return PinRange{smallest, largest}, nil

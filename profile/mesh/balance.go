@@ -4,6 +4,7 @@ import (
 	"math"
 
 	"flankwright/profile"
+	"flankwright/profile/internal/bisect"
 )
 
 // Balance says how a sum of shifts is parted.
@@ -46,24 +47,9 @@ func (r Request) limits(i int, shortening float64) (low, high float64) {
 	}
 	high = profile.MaxProfileShift
 	if thick(high) < 0 {
-		high = bisected(thick, low, high)
+		high = bisect.Root(thick, low, high)
 	}
 	return low, math.Max(low, high)
-}
-
-// bisected is where f, above zero at a and below at b, changes sign, to the last bit.
-func bisected(f func(float64) float64, a, b float64) float64 {
-	for {
-		mid := a + (b-a)/2
-		if mid == a || mid == b {
-			return mid
-		}
-		if f(mid) >= 0 {
-			a = mid
-		} else {
-			b = mid
-		}
-	}
 }
 
 // part parts a sum of shifts at a center distance, and says so where a limit decided.
@@ -109,7 +95,7 @@ func (r Request) part(sum, a float64) (shift [2]float64, note string) {
 				note = "equal sliding lies beyond the limits of undercut and tip thickness; the nearest end is taken"
 			}
 		default:
-			x1 = bisected(uneven, low, high)
+			x1 = bisect.Root(uneven, low, high)
 		}
 	}
 	return [2]float64{x1, sum - x1}, note

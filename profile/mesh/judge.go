@@ -5,6 +5,7 @@ import (
 	"math"
 
 	"flankwright/profile"
+	"flankwright/profile/internal/bisect"
 )
 
 // The parameters findings of this package speak of, besides those of package profile.
@@ -51,7 +52,7 @@ func (p *Pair) jammed(by float64) profile.Violations {
 		far = math.Max(far, p.Reference()*math.Cos(p.PressureAngle))
 	}
 	if play(far) >= 0 {
-		apart = bisected(func(a float64) float64 { return -play(a) }, p.CenterDistance, far)
+		apart = bisect.Root(func(a float64) float64 { return -play(a) }, p.CenterDistance, far)
 	}
 	// Shift thickens each tooth by 2 m tan alpha for one.
 	lower := p.ThinningFor(missing, p.CenterDistance) / (2 * p.Module * math.Tan(p.PressureAngle))
@@ -132,8 +133,8 @@ func (p *Pair) judgeReach(r Request) (warnings []profile.Finding, found profile.
 //	t1 = acos((r_a2^2 - r_a1^2 - a^2)/(2 a r_a1)) + inv a_a1 - inv aw
 //	t2 = acos((a^2 + r_a2^2 - r_a1^2)/(2 a r_a2)),   t1 z1/z2 + inv aw - inv a_a2 >= t2
 //
-// and a pinion that cannot be put in radially (trimming interference; SDP/SI, Elements of
-// Metric Gear Technology, equations 5-6 to 5-9).
+// (SDP/SI, Elements of Metric Gear Technology, equations 5-6 and 5-7), and a pinion that
+// cannot be put in radially.
 func (p *Pair) judgeRing() (warnings []profile.Finding, found profile.Violations) {
 	a := p.CenterDistance
 	z1, z2 := p.z()
@@ -152,12 +153,7 @@ func (p *Pair) judgeRing() (warnings []profile.Finding, found profile.Violations
 				Hint: "take fewer teeth in the gear, or shorten both tips"})
 		}
 	}
-	square := func(v float64) float64 { return v * v }
-	cosA1, cosA2 := c.rb1/ra1, c.rb2/ra2
-	sin1 := (1 - square(cosA1/cosA2)) / (1 - square(z1/z2))
-	sin2 := (square(cosA2/cosA1) - 1) / (square(z2/z1) - 1)
-	radial := sin1 >= 0 && sin1 <= 1 && sin2 >= 0 && sin2 <= 1 &&
-		math.Asin(math.Sqrt(sin1))+inv(c.rb1, ra1)-aw >= z2/z1*(math.Asin(math.Sqrt(sin2))+inv(c.rb2, ra2)-aw)
+	radial := profile.InRing{Teeth: p.Members.Teeth, Base: [2]float64{c.rb1, c.rb2}, Tip: [2]float64{ra1, ra2}, Angle: p.OperatingAngle(a)}.PassesRadially()
 	if !radial {
 		warnings = append(warnings, profile.Finding{Rule: RuleNotRadial, Param: profile.ParamTeeth, Value: profile.NumberOf(z2 - z1),
 			Text: "with {value} teeth between ring and gear the gear cannot be put in radially, only along its axis"})
