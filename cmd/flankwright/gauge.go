@@ -115,6 +115,7 @@ func runGauge(_ context.Context, io streams, req request) error {
 		return err
 	}
 	job.input["command"], job.input["form"] = "gauge", form
+	job.measuring.only = true
 	made, err := makePart(job)
 	if err != nil {
 		return err

@@ -17,7 +17,7 @@ func (m *maker) around() (body.Around, bool) {
 	a := body.Around{Form: j.spec.Form, RootDiameter: d.RootDiameter, WholeDepth: d.WholeDepth, Module: d.Module, RimDiameter: j.rim}
 	switch j.spec.Form {
 	case profile.FormRing:
-		if j.rim == 0 {
+		if j.rim == 0 && !j.measuring.only {
 			m.warnings = append(m.warnings, profile.Finding{Rule: ruleNoOuterEdge, Param: profile.ParamRimDiameter,
 				Text: "the outer edge is missing: the drawing holds the toothed bore only; give --rim-diameter"})
 		}

@@ -11,7 +11,9 @@ import (
 	"github.com/spf13/pflag"
 
 	"flankwright/profile"
+	"flankwright/profile/gauge"
 	"flankwright/profile/label"
+	"flankwright/profile/mesh"
 )
 
 // problem is one thing wrong with a run, as it is told on stderr.
@@ -109,8 +111,8 @@ func fromFindings(err error, show func(profile.Quantity) string) error {
 		switch f.Rule {
 		case label.RuleCharacters, label.RuleTooLong, label.RuleBlank:
 			found[i].value, found[i].exit = "", exitMalformed
-		case label.RuleNoRoom:
-			found[i].value = ""
+		case label.RuleNoRoom, mesh.RuleShortContact, gauge.RuleNoSpan:
+			found[i].value = "" // it is not that of the flag
 		default:
 			if f.Rule.Malformed() {
 				found[i].exit = exitMalformed

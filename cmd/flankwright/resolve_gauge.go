@@ -10,6 +10,7 @@ import (
 // measuring is what is asked of a part's inspection. Lengths are mm; zero values ask
 // for nothing beyond the dimensions themselves.
 type measuring struct {
+	only           bool // nothing is to be drawn
 	pin            float64
 	series         string // of DIN 3967, in place of the allowance
 	allowance      *gauge.Allowance

@@ -82,9 +82,17 @@ func (p *Pair) judge(r Request) (warnings []profile.Finding, found profile.Viola
 	ratio := profile.NumberOf(p.Ratio)
 	switch {
 	case p.Ratio < 1 && !r.AllowShort:
-		found = append(found, profile.Finding{Rule: RuleShortContact, Param: ParamAllowShort, Value: ratio, Bound: profile.NumberOf(1),
+		f := profile.Finding{Rule: RuleShortContact, Param: ParamAllowShort, Value: ratio, Bound: profile.NumberOf(1),
 			Text: "the contact ratio is {value}: before one pair of teeth takes over the other has parted",
-			Hint: "take longer tips, a smaller sum of shifts, more teeth or a smaller pressure angle; or give --allow-short-contact"})
+			Hint: "take longer tips, a smaller sum of shifts, more teeth or a smaller pressure angle; or give --allow-short-contact"}
+		for i, t := range p.Teeth {
+			if t.Undercut {
+				least := profile.NumberOf(t.Spec.Rack.ShiftWithoutUndercut(p.Module, t.Spec.Teeth)).AtLeast()
+				f.Also = append(f.Also, least)
+				f.Hint = fmt.Sprintf("member %d is undercut: a profile shift of {%d} frees it; or ", i+1, len(f.Also)-1) + f.Hint
+			}
+		}
+		found = append(found, f)
 	case p.Ratio < LowContact:
 		warnings = append(warnings, profile.Finding{Rule: RuleLowContact, Param: ParamAllowShort, Value: ratio, Bound: profile.NumberOf(LowContact),
 			Text: "the contact ratio {value} is below {bound} (common practice)"})

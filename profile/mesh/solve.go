@@ -190,7 +190,10 @@ func (p *Pair) solveTeeth(r Request, specs [2]profile.Spec) error {
 	solve := func(i int) {
 		tooth, err := profile.Solve(specs[i])
 		if err != nil {
-			found = append(found, err.(profile.Violations)...)
+			for _, f := range err.(profile.Violations) {
+				f.Text = fmt.Sprintf("member %d: %s", i+1, f.Text)
+				found = append(found, f)
+			}
 			return
 		}
 		p.Teeth[i] = tooth
