@@ -104,11 +104,10 @@ func edgesOf(t *profile.Tooth) edges {
 	return edges{d.TipDiameter / 2, d.TipFormDiameter / 2, d.FormDiameter / 2, d.RootDiameter / 2}
 }
 
-// contactOf follows the flanks of two solved members along the line of action. Form
-// circles end it as tips do.
-func (m Members) contactOf(a float64, teeth [2]*profile.Tooth) Contact {
+// contact follows the flanks of two members along the line of action. Form circles end
+// it as tips do.
+func (m Members) contact(a float64, one, two edges) Contact {
 	c := m.action(a)
-	one, two := edgesOf(teeth[0]), edgesOf(teeth[1])
 	form1, tip1 := length(one.form, c.rb1), length(one.tipForm, c.rb1)
 	start, end := c.onFirst(two.tipForm), tip1
 	var out Contact

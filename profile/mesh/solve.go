@@ -92,7 +92,7 @@ func Solve(r Request) (*Pair, error) {
 	a := p.CenterDistance
 	p.Backlash = m.play(a, p.Shift, thinning)
 	p.Least, p.Most = m.play(a-r.Tolerance, p.Shift, thinning), m.play(a+r.Tolerance, p.Shift, thinning)
-	p.Contact = m.contactOf(a, p.Teeth)
+	p.Contact = m.contact(a, edgesOf(p.Teeth[0]), edgesOf(p.Teeth[1]))
 	warnings, found := p.judge(r)
 	p.Warnings = append(p.Warnings, warnings...)
 	if found != nil {
