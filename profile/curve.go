@@ -4,7 +4,8 @@ import "gonum.org/v1/gonum/spatial/r2"
 
 // Curve is an exact plane curve, travelled as its parameter u runs from the
 // first to the second value of Domain (which may fall). Gears are travelled
-// counter-clockwise, with the material on the left.
+// counter-clockwise, with the material on the left, rings likewise with the
+// material on the right.
 type Curve interface {
 	// Domain returns the parameters of the first and last point.
 	Domain() (from, to float64)

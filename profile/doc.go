@@ -1,10 +1,12 @@
 // Package profile solves the exact transverse profile of involute gear teeth:
 // the flank and root that the generating basic rack would leave, as exact
-// curves, with every diameter and thickness that follows from them.
+// curves, with every diameter and thickness that follows from them. Rings are the
+// spaces of the opposite gear, with the material on the other side; racks are gears
+// of infinitely many teeth.
 //
 // Lengths are millimetres, angles radians, curvatures 1/mm, and shift and tooth
 // numbers are plain numbers, everywhere in this package. The gear axis is the
-// origin and tooth 1 is centered on +Y.
+// origin and tooth 1 is centered on +Y; of a rack the datum line is the x axis.
 //
 // Symbols, as in ISO 21771:2007 and ISO 53:1998, used only as locals beside the
 // formula they come from:
