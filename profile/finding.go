@@ -63,6 +63,7 @@ const (
 	RuleFewPitches         Rule = "few-pitches"
 	RuleSpaceCloses        Rule = "space-closes"
 	RuleCutterTooLarge     Rule = "cutter-too-large"
+	RuleCutterPointed      Rule = "cutter-pointed"
 	RuleCutterGouges       Rule = "cutter-gouges"
 	RuleNoCutterPosition   Rule = "no-cutter-position"
 )

@@ -69,7 +69,7 @@ func (g ringSpace) fault(c cutter) Rule {
 	switch {
 	case math.IsNaN(c.operating):
 		return RuleNoCutterPosition
-	case c.centerAngle < 0:
+	case !(c.centerAngle >= 0):
 		return RuleRoundingTooLarge
 	case g.gouges(c):
 		return RuleCutterGouges
@@ -90,6 +90,11 @@ func (g ringSpace) cutRoot(s Spec) (root ringRoot, warnings []Finding, found Vio
 	if math.IsNaN(c.operating) {
 		return root, nil, Violations{{Rule: RuleNoCutterPosition, Param: ParamCutterShift, Value: NumberOf(s.CutterShift),
 			Text: "the cutter's teeth are too thick for the ring's spaces at any distance", Hint: "lower --cutter-shift or --profile-shift, or raise --thinning" + g.wouldDo(s, rho)}}
+	}
+	if !(g.newCutter(s, s.CutterTeeth, 0).centerAngle > 0) {
+		return root, nil, Violations{{Rule: RuleCutterPointed, Param: ParamCutterTeeth, Value: value, Also: []Quantity{LengthOf(2 * c.tipRadius)},
+			Text: "the teeth of a cutter of {value} come to a point before its tip diameter {0}",
+			Hint: "lower --cutter-shift or --dedendum" + g.wouldDo(s, rho)}}
 	}
 	largest := largestBelow(func(q float64) float64 { return g.newCutter(s, s.CutterTeeth, q).centerAngle }, c.tipRadius-c.rb)
 	switch {
