@@ -120,8 +120,9 @@ func (m *pairMade) roll(show func(profile.Quantity) string) error {
 			Text: "a drawn tip meets what is left in the other's root, by {value}", Hint: "take a narrower beam, or shorten the tip"})
 	}
 	if m.drawn.Error > m.bound && p.Ratio >= 1 {
-		found = append(found, profile.Finding{Rule: ruleDrawnMesh, Param: profile.ParamTolerance, Value: profile.LengthOf(m.drawn.Error), Bound: profile.LengthOf(m.bound),
-			Text: "the drawn members run with a transmission error of {value}, and their tolerances allow {bound}", Hint: "see whether tips reach into fillets; draw with a finer --tolerance"})
+		found = append(found, profile.Finding{Rule: ruleDrawnMesh, Param: profile.ParamTipShortening, Value: profile.LengthOf(m.drawn.Error), Bound: profile.LengthOf(m.bound),
+			Text: "the drawn members run with a transmission error of {value}, and their tolerances allow {bound}: they touch beside their flanks",
+			Hint: "shorten the tips, or give an undercut member more profile shift"})
 	}
 	if found != nil {
 		return fromFindings(found, show)

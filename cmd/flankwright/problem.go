@@ -111,7 +111,7 @@ func fromFindings(err error, show func(profile.Quantity) string) error {
 		switch f.Rule {
 		case label.RuleCharacters, label.RuleTooLong, label.RuleBlank:
 			found[i].value, found[i].exit = "", exitMalformed
-		case label.RuleNoRoom, mesh.RuleShortContact, gauge.RuleNoSpan:
+		case label.RuleNoRoom, mesh.RuleShortContact, gauge.RuleNoSpan, ruleDrawnMesh:
 			found[i].value = "" // it is not that of the flag
 		default:
 			if f.Rule.Malformed() {
