@@ -43,13 +43,19 @@ func (r Request) limits(i int, shortening float64) (low, high float64) {
 			return 1
 		}
 		half := (math.Pi/2+2*x*math.Tan(s.Rack.PressureAngle))/float64(s.Teeth) + profile.Inv(s.Rack.PressureAngle) - profile.Inv(math.Acos(rb/radius))
-		return 2*radius*half/s.Module - LeastTip
+		return 2*radius*half/s.Module - math.Max(LeastTip, s.MinTipThickness/s.Module)
 	}
 	high = profile.MaxProfileShift
-	if thick(high) < 0 {
+	switch {
+	case thick(high) >= 0:
+	case thick(low) >= 0:
 		high = bisect.Root(thick, low, high)
+	case thick(-profile.MaxProfileShift) >= 0:
+		high = bisect.Root(thick, -profile.MaxProfileShift, low) // below low: no shift does
+	default:
+		high = -profile.MaxProfileShift
 	}
-	return low, math.Max(low, high)
+	return low, high
 }
 
 // part parts a sum of shifts at a center distance, and says so where a limit decided.
@@ -62,7 +68,8 @@ func (r Request) part(sum, a float64) (shift [2]float64, note string) {
 	low, high := math.Max(low1, sum-high2), math.Min(high1, sum-low2)
 	if low > high {
 		note = "no parting keeps both members free of undercut and above the least tip thickness"
-		low = math.Min(math.Max(low1, sum-profile.MaxProfileShift), profile.MaxProfileShift)
+		// Both lack alike.
+		low = math.Min(math.Max((low+high)/2, sum-profile.MaxProfileShift), profile.MaxProfileShift)
 		high = low
 	}
 	x1 := 0.0
@@ -76,8 +83,18 @@ func (r Request) part(sum, a float64) (shift [2]float64, note string) {
 		uneven := func(x1 float64) float64 {
 			one, two := r.tips([2]float64{x1, sum - x1}, a)
 			start, end := c.onFirst(two), length(one, c.rb1)
-			if start <= 0 || c.offset-c.sign()*end <= 0 && m.Second != profile.FormRing {
-				start = math.Max(start, 1e-9*m.Module) // at a base circle sliding is without bound
+			// At a base circle sliding is without bound: the tip of the other is too long.
+			behind := math.Inf(1)
+			if m.Second == profile.FormGear {
+				behind = c.offset - end
+			}
+			switch {
+			case start <= 0 && behind <= 0:
+				return behind - start
+			case start <= 0:
+				return math.MaxFloat64
+			case behind <= 0:
+				return -math.MaxFloat64
 			}
 			first, _ := c.sliding(start)
 			_, second := c.sliding(end)

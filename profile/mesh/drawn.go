@@ -110,7 +110,10 @@ func (r rolling) flank(first, second Side) Flank {
 // centers, on the pitch circle.
 func (r rolling) play(first []piece, mate lookup, turn float64) float64 {
 	least := math.Inf(1)
-	const either = 3 // teeth that a contact ratio below 4 needs
+	either := 3 // teeth that a contact ratio below 4 needs
+	if r.Second == profile.FormRing {
+		either = r.Members.Teeth[0] / 2 // tips may cross far from the line of centers
+	}
 	for k := -either; k <= either; k++ {
 		gap := r.gap(first, mate, turn+float64(k)*r.sizes[0])
 		least = math.Min(least, gap)

@@ -23,6 +23,7 @@ const (
 	RuleTooFar        profile.Rule = "center-distance-too-large"
 	RuleThinnedAway   profile.Rule = "thinned-away"
 	RuleJammed        profile.Rule = "negative-backlash"
+	RuleTooLoose      profile.Rule = "backlash-too-large"
 	RuleTipMeetsRoot  profile.Rule = "tip-meets-root"
 	RuleTipInFillet   profile.Rule = "tip-in-fillet"
 	RuleShortContact  profile.Rule = "short-contact"
@@ -36,29 +37,27 @@ const (
 // LowContact is the contact ratio below which common practice warns; no source.
 const LowContact = 1.2
 
-// jammed says by how much teeth jam, and which center distance and shift would not.
-func (p *Pair) jammed(by float64) profile.Violations {
+// jammed says that the teeth lack so much backlash, and which center distance and shift
+// would give it: of a ring a smaller one, of others a larger.
+func (p *Pair) jammed(missing float64) profile.Violations {
 	thinning := [2]float64{}
 	if p.Teeth[0] != nil {
 		thinning = [2]float64{p.Teeth[0].Spec.Thinning, p.Teeth[1].Spec.Thinning}
 	}
-	missing := -by
-	play := func(a float64) float64 {
-		return p.Members.Backlash(a, p.Shift, thinning) - (p.Members.Backlash(p.CenterDistance, p.Shift, thinning) + missing)
-	}
-	apart := p.CenterDistance
-	far := p.CenterDistance + p.sign()*2*p.Module
+	enough := p.Members.Backlash(p.CenterDistance, p.Shift, thinning) + missing
+	lack := func(a float64) float64 { return enough - p.Members.Backlash(a, p.Shift, thinning) }
+	apart, far := p.CenterDistance, p.CenterDistance+p.sign()*2*p.Module
 	if p.Second == profile.FormRing {
 		far = math.Max(far, p.Reference()*math.Cos(p.PressureAngle))
 	}
-	if play(far) >= 0 {
-		apart = bisect.Root(func(a float64) float64 { return -play(a) }, p.CenterDistance, far)
+	if lack(far) <= 0 {
+		apart = bisect.Root(lack, p.CenterDistance, far)
 	}
 	// Shift thickens each tooth by 2 m tan alpha for one.
 	lower := p.ThinningFor(missing, p.CenterDistance) / (2 * p.Module * math.Tan(p.PressureAngle))
 	return profile.Violations{{Rule: RuleJammed, Param: ParamCenterDistance, Value: profile.LengthOf(p.CenterDistance), Bound: profile.LengthOf(apart),
-		Also: []profile.Quantity{profile.LengthOf(missing), profile.NumberOf(p.ShiftSum - lower).AtMost()},
-		Text: "at the center distance {value} the teeth lack {0} of the backlash asked for",
+		Also: []profile.Quantity{profile.LengthOf(missing), profile.NumberOf(tidy(p.ShiftSum - lower)).AtMost()},
+		Text: "at the center distance {value}, or at an end of its tolerance, the teeth lack {0} of backlash",
 		Hint: "a center distance of {bound} or a sum of shifts of {1} gives it"}}
 }
 
@@ -68,7 +67,7 @@ func (p *Pair) judge(r Request) (warnings []profile.Finding, found profile.Viola
 		warnings = append(warnings, profile.Finding{Rule: RulePartedByLimit, Param: profile.ParamProfileShift, Value: profile.NumberOf(p.ShiftSum), Text: "parting the sum of shifts {value}: " + p.Note})
 	}
 	if p.Least.Circumferential < -roundingOf*p.Module {
-		found = append(found, p.jammed(p.Least.Circumferential)...)
+		found = append(found, p.jammed(-p.Least.Circumferential)...)
 	}
 	for i := range p.TipClearance {
 		if c := p.TipClearance[i]; c <= 0 {

@@ -163,6 +163,17 @@ func TestShiftBalance(t *testing.T) {
 	if p, err = mesh.Solve(few); err != nil {
 		t.Fatal(err)
 	}
+	// Few teeth that both lack: equal members stay equal, and it is said.
+	both := pairOf(profile.FormGear, 2, 9, 9)
+	both.CenterDistance, both.AllowShort = 18, true
+	if p, err := mesh.Solve(both); err != nil || math.Abs(p.Shift[0]-p.Shift[1]) > 1e-12 || p.Note == "" {
+		t.Errorf("two of 9 teeth: %+v, %v", p, err)
+	}
+	lean := pairOf(profile.FormGear, 2, 8, 100)
+	lean.CenterDistance, lean.AllowShort = 108, true
+	if p, err := mesh.Solve(lean); err != nil || p.Teeth[0].Dimensions.TipThickness <= 0 || p.Note == "" {
+		t.Errorf("8 teeth and 100: %+v, %v", p, err)
+	}
 	if least := few.Specs[0].Rack.ShiftWithoutUndercut(2, 10); math.Abs(p.Shift[0]-least) > 1e-12 || p.Teeth[0].Undercut {
 		t.Errorf("member 1 has the shift %g, free of undercut from %g on", p.Shift[0], least)
 	}
@@ -186,6 +197,16 @@ func TestRefusals(t *testing.T) {
 			r.CenterDistance, r.ShiftGiven = 43, true
 			r.Specs[1].ProfileShift = 0.2
 		}, mesh.RuleJammed, func(r *mesh.Request, f profile.Finding) { r.CenterDistance = f.Bound.Value - 1e-9 }},
+		"jammed within tolerance": {pairOf(profile.FormRing, 2, 20, 60), func(r *mesh.Request) {
+			r.CenterDistance, r.Tolerance, r.ShiftGiven = 40, 0.05, true
+		}, mesh.RuleJammed, func(r *mesh.Request, f profile.Finding) { r.CenterDistance = f.Bound.Value - 1e-9 }},
+		"tolerance": {pairOf(profile.FormGear, 2, 20, 30), func(r *mesh.Request) {
+			r.CenterDistance, r.Tolerance, r.ShiftGiven = 50, 5, true
+			r.Specs[0].Thinning = 0.1
+		}, mesh.RuleTooClose, nil},
+		"loose": {pairOf(profile.FormGear, 2, 20, 30), func(r *mesh.Request) {
+			r.CenterDistance, r.ShiftGiven, r.Backlash, r.BacklashGiven = 50.5, true, 0.1, true
+		}, mesh.RuleTooLoose, func(r *mesh.Request, f profile.Finding) { r.Backlash = f.Bound.Value }},
 		"small ring": {pairOf(profile.FormRing, 2, 60, 60), func(*mesh.Request) {}, mesh.RuleRingTooSmall, nil},
 		"tips cross": {pairOf(profile.FormRing, 2, 45, 50), func(*mesh.Request) {}, mesh.RuleTipsCross, nil},
 		"fillet": {pairOf(profile.FormRing, 2, 20, 60), func(r *mesh.Request) { r.TipGiven[1] = true }, mesh.RuleTipInFillet,

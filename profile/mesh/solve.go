@@ -39,7 +39,8 @@ type Pair struct {
 	ShiftSum       float64
 	Shift          [2]float64
 	Backlash       Play
-	// Least and Most are the plays at the ends of the center distance's tolerance.
+	// Least and Most are the plays at the ends of the center distance's tolerance; a ring's
+	// is least where it is largest.
 	Least, Most Play
 	Contact
 	Shortened [2]float64 // mm, by how much tips are shorter than their specs' own
@@ -78,6 +79,14 @@ func Solve(r Request) (*Pair, error) {
 	if err := p.place(r); err != nil {
 		return nil, err
 	}
+	if r.Tolerance > 0 {
+		if found := append(p.checkDistance(p.CenterDistance-r.Tolerance), p.checkDistance(p.CenterDistance+r.Tolerance)...); found != nil {
+			for i := range found {
+				found[i].Text = "within its tolerance " + found[i].Text
+			}
+			return nil, found
+		}
+	}
 	specs := r.Specs
 	for i := range specs {
 		specs[i].ProfileShift = p.Shift[i]
@@ -92,6 +101,9 @@ func Solve(r Request) (*Pair, error) {
 	a := p.CenterDistance
 	p.Backlash = m.play(a, p.Shift, thinning)
 	p.Least, p.Most = m.play(a-r.Tolerance, p.Shift, thinning), m.play(a+r.Tolerance, p.Shift, thinning)
+	if p.Most.Circumferential < p.Least.Circumferential {
+		p.Least, p.Most = p.Most, p.Least
+	}
 	p.Contact = m.contact(a, edgesOf(p.Teeth[0]), edgesOf(p.Teeth[1]))
 	warnings, found := p.judge(r)
 	p.Warnings = append(p.Warnings, warnings...)
@@ -115,19 +127,31 @@ func (p *Pair) place(r Request) error {
 			return profile.Violations{{Rule: RuleNoDistance, Param: profile.ParamProfileShift, Value: profile.NumberOf(p.ShiftSum),
 				Text: "no center distance goes with a sum of shifts of {value}", Hint: "bring the sum nearer to zero"}}
 		}
-		return p.checkDistance(p.CenterDistance)
+		if found := p.checkDistance(p.CenterDistance); found != nil {
+			return found
+		}
+		return nil
 	}
 	p.CenterDistance = r.CenterDistance
-	if err := p.checkDistance(p.CenterDistance); err != nil {
-		return err
+	if found := p.checkDistance(p.CenterDistance); found != nil {
+		return found
 	}
-	p.ShiftSum = m.ShiftSum(p.CenterDistance)
+	p.ShiftSum = tidy(m.ShiftSum(p.CenterDistance))
 	p.Shift, p.Note = r.part(p.ShiftSum, p.CenterDistance)
 	return nil
 }
 
+// tidy takes the rounding off a sum of shifts that is nothing else.
+func tidy(shift float64) float64 {
+	const noise = 1e-12 // far above the rounding of the involute function at many teeth
+	if math.Abs(shift) < noise {
+		return 0
+	}
+	return shift
+}
+
 // checkDistance refuses a center distance beyond what shifts can give.
-func (p *Pair) checkDistance(a float64) error {
+func (p *Pair) checkDistance(a float64) profile.Violations {
 	least, largest := p.Range()
 	f := profile.Finding{Param: ParamCenterDistance, Value: profile.LengthOf(a),
 		Also: []profile.Quantity{profile.LengthOf(least).AtLeast(), profile.LengthOf(largest).AtMost()},
@@ -156,9 +180,14 @@ func (p *Pair) thin(r Request, specs *[2]profile.Spec) error {
 	if !asked {
 		return nil
 	}
-	sum := m.ThinningFor(want-m.Backlash(a, p.Shift, [2]float64{}), a)
-	if sum < -roundingOf*m.Module {
-		return p.jammed(want - m.Backlash(a, p.Shift, [2]float64{}))
+	have := m.Backlash(a, p.Shift, [2]float64{})
+	sum := m.ThinningFor(want-have, a)
+	if sum < -roundingOf*m.Module && r.BacklashGiven { // a rule's is the least
+		higher := p.ThinningFor(have-want, a) / (2 * m.Module * math.Tan(m.PressureAngle))
+		return profile.Violations{{Rule: RuleTooLoose, Param: ParamBacklash, Value: profile.LengthOf(want), Bound: profile.LengthOf(have).AtLeast(),
+			Also: []profile.Quantity{profile.NumberOf(p.ShiftSum + higher)},
+			Text: "at this center distance and with these shifts the backlash is {bound} without any thinning, more than the {value} asked for",
+			Hint: "ask for {bound} or more, or for a sum of shifts of {0}"}}
 	}
 	sum = math.Max(0, sum)
 	specs[0].Thinning, specs[1].Thinning = r.Split*sum, (1-r.Split)*sum
