@@ -123,23 +123,35 @@ func nameText(r request, name string) string {
 			}
 		}
 	}
-	return strings.Join(texts, "+")
+	// A pair's two values are no part of a list in a name.
+	return strings.ReplaceAll(strings.Join(texts, "+"), ",", "-")
+}
+
+// baseNames are the names of a row's files without their endings: those of the drawings,
+// and that of the sidecar where it is none of them.
+func (f form) baseNames(name string) []string {
+	names := []string{name}
+	for _, suffix := range f.suffixes {
+		if suffix != "" {
+			names = append(names, name+suffix)
+		}
+	}
+	return names
 }
 
 // checkRowName refuses what is no name for the row's files.
-func checkRowName(name string) error {
+func (f form) checkRowName(name string) error {
 	const longestEnding = ".json"
-	err := files.CheckName(name + longestEnding)
-	if err == nil {
-		folded := strings.ToLower(name)
-		if folded == listName || strings.HasPrefix(folded, listName+"-") {
-			err = fmt.Errorf("%q is the name of the family's own list", name)
+	for _, base := range f.baseNames(name) {
+		err := files.CheckName(base + longestEnding)
+		if folded := strings.ToLower(base); err == nil && (folded == listName || strings.HasPrefix(folded, listName+"-")) {
+			err = fmt.Errorf("%q is the name of the family's own list", base)
+		}
+		if err != nil {
+			return problems{{flag: "name", message: err.Error(), hint: "give a plain name without folder and ending", exit: exitMalformed}}
 		}
 	}
-	if err == nil {
-		return nil
-	}
-	return problems{{flag: "name", message: err.Error(), hint: "give a plain name without folder and ending", exit: exitMalformed}}
+	return nil
 }
 
 // listName is the name of the family's list, without its ending.

@@ -88,19 +88,21 @@ func planFamily(ctx context.Context, source *tableSource, o familyOptions, defau
 			f.rows++
 		}
 		r := f.read(row)
-		if r.name == "" || checkRowName(r.name) != nil {
+		if r.name == "" || r.form.checkRowName(r.name) != nil {
 			continue // a matter of the row
 		}
-		key := strings.ToLower(r.name) // one file where case does not count
-		if before, twice := names[key]; twice {
-			count++
-			if count <= mostFaults {
-				found = append(found, problem{message: fmt.Sprintf("%s: the name %q is that of line %d", source.at(row.Line, 0), r.name, before),
-					hint: "give a column name, or a --name-pattern that tells the rows apart, such as {form}-{size}-z{teeth}-x{profile-shift}", exit: exitMalformed})
+		for _, name := range r.form.baseNames(r.name) {
+			key := strings.ToLower(name) // one file where case does not count
+			if before, twice := names[key]; twice {
+				count++
+				if count <= mostFaults {
+					found = append(found, problem{message: fmt.Sprintf("%s: the name %q is that of line %d", source.at(row.Line, 0), name, before),
+						hint: "give a column name, or a --name-pattern that tells the rows apart, such as {form}-{size}-z{teeth}-x{profile-shift}", exit: exitMalformed})
+				}
+				break
 			}
-			continue
+			names[key] = row.Line
 		}
-		names[key] = row.Line
 	}
 	if count > mostFaults {
 		found = append(found, problem{message: fmt.Sprintf("%s: and %d more mistakes", source.name, count-mostFaults), exit: exitMalformed})
@@ -191,7 +193,7 @@ func (f *family) read(row table.Row) tableRow {
 	if r.name = name; name == "" {
 		r.name = f.pattern.name(formName, row.Number, r.request)
 	}
-	if err := checkRowName(r.name); err != nil {
+	if err := r.form.checkRowName(r.name); err != nil {
 		r.found = append(r.found, err.(problems)...)
 	}
 	return r

@@ -64,8 +64,7 @@ func (w *rowMaker) prepare(r *rowResult, memory *pages) ([]files.File, error) {
 	if err != nil {
 		return nil, err
 	}
-	suffixes := job.suffixes()
-	set, err := renderSheets(made, memory, w.formats, func(i int) string { return r.row.name + suffixes[i] })
+	set, err := renderSheets(made, memory, w.formats, func(i int) string { return r.row.name + r.row.form.suffixes[i] })
 	if err != nil {
 		return nil, err
 	}
@@ -103,7 +102,7 @@ func (w *rowMaker) standing(row tableRow, j job) (listed sidecar.FamilyRow, ok b
 		return listed, false
 	}
 	var names []string
-	for _, suffix := range j.suffixes() {
+	for _, suffix := range row.form.suffixes {
 		for _, format := range w.formats {
 			names = append(names, row.name+suffix+"."+format)
 		}

@@ -13,6 +13,8 @@ type form struct {
 	name       string
 	parameters func() []parameter
 	resolve    func(request) (job, error)
+	// suffixes tell the drawings of one product apart, behind a row's name.
+	suffixes []string
 }
 
 // job is a request put into numbers, ready to be made.
@@ -20,8 +22,6 @@ type job interface {
 	// normalized is the request as the sidecar keeps it.
 	normalized() map[string]any
 	make() (product, error)
-	// suffixes tell the drawings of one job apart, behind a row's name.
-	suffixes() []string
 }
 
 // product is what a job makes, ready to be written.
@@ -44,9 +44,9 @@ func forms() []form {
 	resolve := func(r request) (job, error) { return resolvePart(r) }
 	var list []form
 	for _, name := range []string{"gear", "ring", "rack"} {
-		list = append(list, form{name, func() []parameter { return partParameters(name) }, resolve})
+		list = append(list, form{name, func() []parameter { return partParameters(name) }, resolve, []string{""}})
 	}
-	return append(list, form{pairForm, pairParameters, func(r request) (job, error) { return resolvePair(r) }})
+	return append(list, form{pairForm, pairParameters, func(r request) (job, error) { return resolvePair(r) }, []string{"-1", "-2", "-assembly"}})
 }
 
 // partForms are the forms that are one part each.

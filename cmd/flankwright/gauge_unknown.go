@@ -4,6 +4,7 @@ import (
 	"encoding/json"
 	"fmt"
 	"math"
+	"slices"
 	"strings"
 	"text/tabwriter"
 
@@ -46,7 +47,7 @@ func runUnknown(io streams, req request, out output) error {
 	}
 	known := []string{"unknown", "form", "teeth", "measured-tip-diameter", "measured-span", "measured-over-pins", "pin-diameter", "uncertainty", "unit", "json", "quiet"}
 	for name := range req.values {
-		if near, _ := nearest(name, known); near != name {
+		if !slices.Contains(known, name) {
 			r.fail(name, "", "does not go with --unknown, which finds it", "leave it out")
 		}
 	}

@@ -19,7 +19,6 @@ type pairJob struct {
 
 func (j pairJob) normalized() map[string]any { return j.input }
 func (j pairJob) make() (product, error)     { return j.makePair() }
-func (j pairJob) suffixes() []string         { return []string{"-1", "-2", "-assembly"} }
 
 // newReaderOf is a reader with the unit of the pair's bare lengths.
 func newReaderOf(j pairJob) *reader {

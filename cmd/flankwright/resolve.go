@@ -43,7 +43,6 @@ type partJob struct {
 
 func (j partJob) normalized() map[string]any { return j.input }
 func (j partJob) make() (product, error)     { return makePart(j) }
-func (j partJob) suffixes() []string         { return []string{""} }
 
 // resolvePart reads a request for a gear. All that is malformed is reported
 // together.

@@ -113,7 +113,7 @@ func (p *Pair) judgeReach(r Request) (warnings []profile.Finding, found profile.
 		if reach <= slack {
 			continue
 		}
-		if p.Teeth[root].Undercut {
+		if p.Teeth[root].Undercut && p.Second != profile.FormRing { // a ring's tip reaches round further
 			warnings = append(warnings, profile.Finding{Rule: RuleContactShort, Param: profile.ParamProfileShift, Value: profile.LengthOf(reach),
 				Text: fmt.Sprintf("undercut of member %d takes {value} of the path of contact", root+1)})
 			continue

@@ -88,8 +88,8 @@ func (l lookup) half(h float64) (float64, bool) {
 	return math.Atan2(-p.X, p.Y), true
 }
 
-// at is the point of a segment at a height between those of its ends: closed forms for
-// arcs and lines by Newton's method from the chord, which converges since they are short.
+// at is the point of a segment at a height between those of its ends, by secants with the
+// Illinois correction: segments are short and rise or fall steadily, so that a few do.
 func (l lookup) at(s *piece, h float64) r2.Vec {
 	low, high := 0.0, 1.0
 	flow, fhigh := l.height(s.Start)-h, l.height(s.End)-h
