@@ -5,6 +5,7 @@ import (
 
 	"flankwright/profile"
 	"flankwright/profile/gauge"
+	"flankwright/profile/mesh"
 )
 
 // Inspection are the dimensions a part is inspected by. Lengths are mm.
@@ -30,7 +31,7 @@ type Reading struct {
 	Name              string  // as "span over 4 teeth"
 	Measured, Nominal float64 // mm
 	gauge.Reading
-	Backlash *gauge.Backlash // nil without a mate
+	Backlash *mesh.Play // nil without a mate
 }
 
 // Inspect works the dimensions out. A pin diameter of 0 takes the nearest one kept in

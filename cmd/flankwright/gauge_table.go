@@ -65,7 +65,7 @@ func printInspection(b *strings.Builder, m *partMade) {
 		line(fmt.Sprintf("span over %d teeth", s.Nominal.TeethSpanned), fmt.Sprintf("W_%d", s.Nominal.TeethSpanned), s.Nominal.Value, s.Nominal.ContactDiameter, s.Limits)
 	}
 	if p := i.Pins; p != nil {
-		line(fmt.Sprintf("%s pins %s", pinsLie(m), show(profile.LengthOf(p.Nominal.PinDiameter))), "M_d", p.Nominal.Value, p.Nominal.Contact, p.Limits)
+		line(fmt.Sprintf("%s pins %s", pinsLie(m.part.Tooth.Form), show(profile.LengthOf(p.Nominal.PinDiameter))), "M_d", p.Nominal.Value, p.Nominal.Contact, p.Limits)
 		line("ideal pin", "D_M", i.IdealPin, 0, nil)
 	}
 	if c := i.Chord; c != nil {
@@ -83,8 +83,8 @@ func printInspection(b *strings.Builder, m *partMade) {
 }
 
 // pinsLie is how pins are measured on the part.
-func pinsLie(m *partMade) string {
-	switch m.part.Tooth.Form {
+func pinsLie(form profile.Form) string {
+	switch form {
 	case profile.FormRing:
 		return "between"
 	case profile.FormRack:

@@ -4,7 +4,14 @@ import (
 	"fmt"
 
 	"flankwright/export"
+	"flankwright/profile"
 	"flankwright/profile/gauge"
+	"flankwright/profile/mesh"
+)
+
+const (
+	ruleMate       profile.Rule  = "mate-teeth"
+	paramMateTeeth profile.Param = "mate-teeth"
 )
 
 // makeInspection works out what the part is inspected by, and what readings mean.
@@ -47,11 +54,7 @@ func (m *maker) readings(g gauge.Gear) error {
 		}
 		entry := export.Reading{Name: name, Measured: measured, Nominal: nominal, Reading: r}
 		if ask.mateTeeth != 0 {
-			measured, err := g.WithThickness(r.Thickness)
-			if err != nil {
-				return m.refuse(err)
-			}
-			play, err := m.play(measured)
+			play, err := m.play(r.Thinning)
 			if err != nil {
 				return m.refuse(err)
 			}
@@ -81,7 +84,7 @@ func (m *maker) readings(g gauge.Gear) error {
 	if p != nil {
 		for _, v := range ask.overPins {
 			r, err := g.FromPins(p.Nominal.PinDiameter, v)
-			if err := add("over pins", v, p.Nominal.Value, r, err); err != nil {
+			if err := add(pinsLie(m.tooth.Form)+" pins", v, p.Nominal.Value, r, err); err != nil {
 				return err
 			}
 		}
@@ -97,19 +100,17 @@ func (m *maker) readings(g gauge.Gear) error {
 	return nil
 }
 
-// play is the backlash with a nominal mate.
-func (m *maker) play(g gauge.Gear) (gauge.Backlash, error) {
+// play is the backlash that a measured thinning has with a nominal mate, a gear.
+func (m *maker) play(thinning float64) (mesh.Play, error) {
 	ask, s := m.job.measuring, m.job.spec
-	radius := s.Module * float64(ask.mateTeeth) / 2
-	tip := radius + s.Rack.Addendum
-	mate, err := gauge.New(gauge.Spec{Kind: gauge.External, Module: s.Module, Teeth: ask.mateTeeth, PressureAngle: s.Rack.PressureAngle,
-		Tip: tip, TipForm: tip, Form: radius})
-	if err != nil {
-		return gauge.Backlash{}, err
+	members := mesh.Members{Module: s.Module, PressureAngle: s.Rack.PressureAngle, Teeth: [2]int{ask.mateTeeth, s.Teeth}, Second: m.tooth.Form}
+	if m.tooth.Form == profile.FormRing && ask.mateTeeth >= s.Teeth {
+		return mesh.Play{}, profile.Violations{{Rule: ruleMate, Param: paramMateTeeth, Value: profile.NumberOf(float64(ask.mateTeeth)), Bound: profile.NumberOf(float64(s.Teeth - 1)),
+			Text: "a gear of {value} teeth does not fit into the ring", Hint: "it must have at most {bound}"}}
 	}
 	a := ask.centerDistance
 	if a == 0 {
-		a = radius + m.tooth.Dimensions.ReferenceDiameter/2
+		a = members.Reference()
 	}
-	return g.Backlash(mate, a)
+	return members.PlayAt(a, [2]float64{0, s.ProfileShift}, [2]float64{0, thinning})
 }

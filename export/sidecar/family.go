@@ -37,9 +37,11 @@ type FamilyRow struct {
 	Errors    []string       `json:"errors,omitempty"`
 }
 
-// keyFigures are the dimensions a list shows, in the order of its columns.
+// keyFigures are the figures a list shows, in the order of its columns: dimensions of a
+// part, then what is known of a pair.
 func keyFigures() []string {
-	return []string{"module", "diametral_pitch", "teeth", "reference_diameter", "tip_diameter", "root_diameter", "form_diameter", "tooth_thickness"}
+	return []string{"module", "diametral_pitch", "teeth", "reference_diameter", "tip_diameter", "root_diameter", "form_diameter", "tooth_thickness",
+		"center_distance", "contact_ratio", "backlash_circumferential", "transmission_error"}
 }
 
 // FamilyRow sums the document of one row up. The sidecar is the file it was written to.
@@ -50,6 +52,10 @@ func (d *Document) FamilyRow(line int, name, form string, sidecar File) FamilyRo
 		if v, ok := d.Dimensions[key]; ok {
 			row.Figures[key] = v
 		}
+	}
+	if m := d.Mesh; m != nil {
+		row.Figures["center_distance"], row.Figures["contact_ratio"] = m.CenterDistance, m.ContactRatio
+		row.Figures["backlash_circumferential"], row.Figures["transmission_error"] = m.BacklashCircumferential, m.DrawnMesh.TransmissionError
 	}
 	for layer, o := range d.Outline {
 		if strings.HasPrefix(layer, "OUTLINE") {

@@ -64,8 +64,9 @@ func TestFormsWithinTolerance(t *testing.T) {
 				if worst > tolerance*(1+1e-6) {
 					t.Errorf("%s, kind %d, tolerance %g: a drawn point is %g off", name, kind, tolerance, worst)
 				}
-				if kind == Line && worst < 0.3*tolerance && s.Form == profile.FormRing {
-					t.Errorf("%s: chords within %g, only %g is used", name, tolerance, worst)
+				// Racks are straight, and one cubic a curve is much nearer than asked.
+				if s.Form == profile.FormRing && kind != Cubic && worst < 0.3*tolerance {
+					t.Errorf("%s, kind %d: of the tolerance %g only %g is used", name, kind, tolerance, worst)
 				}
 			}
 		}

@@ -56,7 +56,7 @@ func ExampleGear_Pin_refused() {
 	// pin-diameter: a pin of 2 mm falls through the usable flank, which ends at 53.1487 mm
 }
 
-// What a measured span says, and the backlash that follows with a nominal mate.
+// What a measured span says.
 func ExampleGear_FromSpan() {
 	g := exampleGear()
 	r, err := g.FromSpan(4, 21.34)
@@ -65,12 +65,8 @@ func ExampleGear_FromSpan() {
 		return
 	}
 	fmt.Printf("thickness %.4f, off by %.4f; a thinning of %.4f\n", r.Thickness, r.Deviation, r.Thinning)
-	made, _ := g.WithThickness(r.Thickness)
-	play, _ := made.Backlash(g, 56)
-	fmt.Printf("backlash %.4f, normal %.4f\n", play.Circumferential, play.Normal)
 	// Output:
 	// thickness 3.0254, off by -0.0662; a thinning of 0.1162
-	// backlash 0.1662, normal 0.1562
 }
 
 // The tolerances of class 7.

@@ -22,8 +22,6 @@ const (
 	ParamAllowance         profile.Param = "thickness-allowance"
 	ParamFlankClass        profile.Param = "flank-class"
 	ParamReferenceDiameter profile.Param = "reference-diameter"
-	ParamCenterDistance    profile.Param = "center-distance"
-	ParamMateTeeth         profile.Param = "mate-teeth"
 	ParamUncertainty       profile.Param = "uncertainty"
 )
 
@@ -38,8 +36,6 @@ const (
 	RulePinTooLarge     profile.Rule = "pin-too-large"
 	RuleNoPin           profile.Rule = "no-pin"
 	RuleUnreachable     profile.Rule = "reading-unreachable"
-	RuleMateDiffers     profile.Rule = "mate-differs"
-	RuleNoMesh          profile.Rule = "no-mesh"
 	RuleUnknownSeries   profile.Rule = "unknown-series"
 	RuleTooFewReadings  profile.Rule = "too-few-readings"
 	RuleNothingExplains profile.Rule = "nothing-explains"

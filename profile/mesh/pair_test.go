@@ -64,6 +64,7 @@ func TestPublishedPairs(t *testing.T) {
 	a = ring.CenterDistance(-0.5)
 	printed(t, "center distance of a ring", a, 13.1683, 4)
 	printed(t, "operating angle of a ring", ring.OperatingAngle(a)/deg, 31.0937, 3) // 31.09362 recomputed
+	printed(t, "center distance of a ring, later edition", ring.CenterDistance(-0.516), 13.2, 1)
 	rw = ring.PitchRadii(a)
 	printed(t, "operating pitch diameter 1", 2*rw[0], 52.673, 3)
 	printed(t, "operating pitch diameter 2", 2*rw[1], 79.010, 3)
@@ -91,18 +92,30 @@ func TestContactRatio(t *testing.T) {
 		t.Fatal(err)
 	}
 	printed(t, "contact ratio", p.Ratio, 1.62, 2)
+	printed(t, "operating angle 2 % further apart", p.OperatingAngle(1.02*p.CenterDistance)/deg, 22.89, 2)
 	printed(t, "length of action", p.Ratio*p.Teeth[0].Dimensions.BasePitch/25.4, 0.798, 3)
 }
 
-// TestLeastBacklash: ANSI/AGMA 2002-B88, appendix (Mott, table 8-5 B), and ISO/TR 10064-2
-// (from memory), whose table rounds up to 0.01.
+// TestLeastBacklash: ANSI/AGMA 2002-B88, appendix (Mott, tables 8-5 A and B), and ISO/TR
+// 10064-2:1996, table A.1 (from memory), which rounds up to 0.01.
 func TestLeastBacklash(t *testing.T) {
-	for _, row := range []struct{ m, a, agma, iso float64 }{
-		{1.5, 50, 0.13, 0.09}, {2, 100, 0.17, 0.12}, {3, 200, 0.25, 0.17}, {5, 400, 0.41, 0.28}, {8, 800, 0.70, 0.47}, {12, 400, 0.62, 0.42}, {18, 800, 1.00, 0.67},
+	type row struct{ size, a, least float64 } // module and mm, or teeth per inch and inches
+	for _, r := range []row{
+		{1.5, 50, 0.13}, {1.5, 100, 0.16}, {2, 50, 0.14}, {2, 100, 0.17}, {2, 200, 0.22}, {3, 50, 0.18}, {3, 100, 0.20}, {3, 200, 0.25}, {3, 400, 0.35}, {5, 100, 0.26}, {5, 200, 0.31}, {5, 400, 0.41}, {8, 100, 0.35}, {8, 200, 0.40}, {8, 400, 0.50}, {8, 800, 0.70}, {12, 200, 0.52}, {12, 400, 0.62}, {12, 800, 0.82}, {18, 400, 0.80}, {18, 800, 1.00},
 	} {
-		printed(t, fmt.Sprintf("AGMA backlash, module %g at %g", row.m, row.a), mesh.LeastBacklash(mesh.RuleAGMA, row.a, row.m), row.agma, 2)
-		if got := mesh.LeastBacklash(mesh.RuleISO, row.a, row.m); got > row.iso+1e-12 || got < row.iso-0.01-1e-12 {
-			t.Errorf("ISO backlash, module %g at %g is %g, the table says %g", row.m, row.a, got, row.iso)
+		// Of halves the table rounds two down to even; hence half a digit either way.
+		printed(t, fmt.Sprintf("AGMA backlash, module %g at %g", r.size, r.a), mesh.LeastBacklash(mesh.RuleAGMA, r.a, r.size), r.least, 2)
+	}
+	for _, r := range []row{
+		{18, 2, 0.005}, {18, 4, 0.006}, {12, 2, 0.006}, {12, 4, 0.007}, {12, 8, 0.009}, {8, 2, 0.007}, {8, 4, 0.008}, {8, 8, 0.010}, {8, 16, 0.014}, {5, 4, 0.010}, {5, 8, 0.012}, {5, 16, 0.016}, {3, 4, 0.014}, {3, 8, 0.016}, {3, 16, 0.020}, {3, 32, 0.028}, {2, 8, 0.021}, {2, 16, 0.025}, {2, 32, 0.033}, {1.25, 16, 0.034}, {1.25, 32, 0.042},
+	} {
+		printed(t, fmt.Sprintf("AGMA backlash in inches, %g P at %g", r.size, r.a), mesh.LeastBacklash(mesh.RuleAGMA, r.a*25.4, 25.4/r.size)/25.4, r.least, 3)
+	}
+	for _, r := range []row{
+		{1.5, 50, 0.09}, {1.5, 100, 0.11}, {2, 50, 0.10}, {2, 100, 0.12}, {2, 200, 0.15}, {3, 50, 0.12}, {3, 100, 0.14}, {3, 200, 0.17}, {3, 400, 0.24}, {5, 100, 0.18}, {5, 200, 0.21}, {5, 400, 0.28}, {8, 100, 0.24}, {8, 200, 0.27}, {8, 400, 0.34}, {8, 800, 0.47}, {12, 200, 0.35}, {12, 400, 0.42}, {12, 800, 0.55}, {18, 400, 0.54}, {18, 800, 0.67}, {18, 1600, 0.94},
+	} {
+		if got := mesh.LeastBacklash(mesh.RuleISO, r.a, r.size); got > r.least+1e-12 || got <= r.least-0.01 {
+			t.Errorf("ISO backlash, module %g at %g is %g, the table says %g", r.size, r.a, got, r.least)
 		}
 	}
 	// SDP/SI, section 14 (found): the center distance changes by 1/(2 tan alpha) of the

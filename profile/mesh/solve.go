@@ -55,16 +55,34 @@ type Play struct {
 	Angle                   [2]float64
 }
 
-// play works the backlash out.
+// play works the backlash out. What rounding leaves of members without any is none.
 func (m Members) play(a float64, shift, thinning [2]float64) Play {
+	const rounding = 16 // last places of the largest term
 	j := m.Backlash(a, shift, thinning)
+	rw := m.PitchRadii(a)
+	if size := math.Max(m.Module, math.Max(rw[0], rw[1])); math.Abs(j) <= rounding*(math.Nextafter(size, math.Inf(1))-size) {
+		j = 0
+	}
 	p := Play{Circumferential: j, Normal: j * math.Cos(m.OperatingAngle(a))}
-	for i, rw := range m.PitchRadii(a) {
-		if rw > 0 {
-			p.Angle[i] = j / rw
+	for i, r := range rw {
+		if r > 0 {
+			p.Angle[i] = j / r
 		}
 	}
 	return p
+}
+
+// PlayAt is the backlash of members with these shifts and thinnings at a center distance
+// in mm, negative where the teeth jam; refused below a0 cos alpha, where there is no
+// operating angle.
+func (m Members) PlayAt(a float64, shift, thinning [2]float64) (Play, error) {
+	p := m.play(a, shift, thinning)
+	if math.IsNaN(p.Normal) {
+		return Play{}, profile.Violations{{Rule: RuleTooClose, Param: ParamCenterDistance, Value: profile.LengthOf(a),
+			Bound: profile.LengthOf(m.Reference() * math.Cos(m.PressureAngle)).AtLeast(),
+			Text:  "the center distance {value} is too small for these teeth", Hint: "it must be at least {bound}"}}
+	}
+	return p, nil
 }
 
 // Solve makes the pair, or says why it cannot work: the error is of type
